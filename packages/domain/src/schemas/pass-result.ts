@@ -18,13 +18,11 @@ export const PASS_QUANTITIES = [
 export type PassQuantity = (typeof PASS_QUANTITIES)[number];
 
 /** A procedure's range for one quantity, both ends allowed; in the quantity's own unit. */
-export const QuantityRange = z
-  .object({ min: z.number(), max: z.number() })
-  .meta({
-    id: "QuantityRange",
-    description: "Allowed range, both ends included",
-    example: { min: 220, max: 280 },
-  });
+export const QuantityRange = z.object({ min: z.number(), max: z.number() }).meta({
+  id: "QuantityRange",
+  description: "Allowed range, both ends included",
+  example: { min: 220, max: 280 },
+});
 export type QuantityRange = z.infer<typeof QuantityRange>;
 
 /** One quantity over the time the arc burned, each moment weighing the same however it was sampled. */
@@ -162,13 +160,10 @@ export const PassResult = z
         gas_l_min: statistics,
       })
       .meta({ description: "Each quantity over the arc time; null where the log does not have it" }),
-    interpass_c: z
-      .number()
-      .nullable()
-      .meta({
-        description: "Workpiece temperature last read before the arc struck, °C; null if not read",
-        example: 118,
-      }),
+    interpass_c: z.number().nullable().meta({
+      description: "Workpiece temperature last read before the arc struck, °C; null if not read",
+      example: 118,
+    }),
     length_mm: lengthMm("Length welded; null when neither travel speed nor the seam's length is known", 360.6)
       .min(0)
       .nullable(),
@@ -177,15 +172,10 @@ export const PassResult = z
       .nullable()
       .meta({ description: "travel: travel speed over the arc time; seam: the seam's length as given" }),
     process: z.string().meta({ description: "Process number, ISO 4063", example: "135" }),
-    arc_efficiency_k: z
-      .number()
-      .min(0)
-      .max(1)
-      .nullable()
-      .meta({
-        description: "Arc efficiency k used (EN 1011-1 Table 1); null for a process without one",
-        example: 0.8,
-      }),
+    arc_efficiency_k: z.number().min(0).max(1).nullable().meta({
+      description: "Arc efficiency k used (EN 1011-1 Table 1); null for a process without one",
+      example: 0.8,
+    }),
     heat_input_kj_mm: heatInput("from mean current and mean voltage"),
     heat_input_instant_kj_mm: heatInput("from the power of each sample"),
     judgement: PassJudgement.nullable().meta({ description: "Null when no procedure ranges were given" }),
