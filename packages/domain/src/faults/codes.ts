@@ -95,6 +95,13 @@ export const FAULT_KINDS = {
     "No arc burned in this log",
     "Current never stayed above the arc-on level; check the units and the file.",
   ),
+  // Proofs
+  "proof-invalid": kind(
+    422,
+    12,
+    "A ledger proof does not hold",
+    "The record may have been changed; ask for a fresh copy and check it against a checkpoint kept elsewhere.",
+  ),
   // Requests
   "request-invalid": kind(422, 30, "The request does not fit", "Mend the fields named."),
   "request-malformed": kind(
