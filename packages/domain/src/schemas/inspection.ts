@@ -4,6 +4,7 @@ import { id, instant, note } from "./quantities.ts";
 /** Methods by the abbreviations of ISO 17635: visual, penetrant, magnetic, radiographic, ultrasonic. */
 export const INSPECTION_METHODS = ["VT", "PT", "MT", "RT", "UT"] as const;
 export const INSPECTION_RESULTS = ["accepted", "rejected"] as const;
+export type InspectionResult = (typeof INSPECTION_RESULTS)[number];
 
 /** One examination of one seam. */
 export const Inspection = z
