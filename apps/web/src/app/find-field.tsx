@@ -1,0 +1,53 @@
+import { type FormEvent, type ReactElement, useEffect, useRef } from "react";
+import { useNavigate } from "react-router";
+import { findPath } from "./paths.ts";
+import { shortcutChoice } from "./shortcuts.ts";
+
+const EDITABLE = "input, textarea, select, [contenteditable]";
+
+/** The one door: a tag, serial, heat, wire lot, name, drawing or order. */
+export function FindField(): ReactElement {
+  const input = useRef<HTMLInputElement>(null);
+  const navigate = useNavigate();
+  useSlashFocus(input);
+  const find = (event: FormEvent) => {
+    event.preventDefault();
+    const text = input.current?.value.trim() ?? "";
+    if (text !== "") void navigate(findPath(text));
+  };
+  return (
+    <search className="max-lg:order-2 max-lg:w-full max-lg:pb-2">
+      <form action="/find" onSubmit={find}>
+        <input
+          ref={input}
+          type="search"
+          name="q"
+          aria-label="Find by tag, serial, heat, lot or name"
+          aria-keyshortcuts="/"
+          placeholder="Tag, serial, heat, name…"
+          autoComplete="off"
+          autoCapitalize="off"
+          spellCheck={false}
+          className="figures h-9 w-72 rounded-sm border border-transparent bg-field-on-soot px-3 text-on-soot placeholder:text-ash-on-soot max-lg:h-11 max-lg:w-full xl:w-80"
+        />
+      </form>
+    </search>
+  );
+}
+
+/** "/" puts the cursor into the field, unless somebody is typing or has switched the shortcut off. */
+function useSlashFocus(input: React.RefObject<HTMLInputElement | null>): void {
+  // The key is pressed anywhere on the page, outside React's own tree.
+  useEffect(() => {
+    const onKey = (event: KeyboardEvent) => {
+      if (event.key !== "/" || event.ctrlKey || event.metaKey || event.altKey) return;
+      if (shortcutChoice.read() === "off") return;
+      if (event.target instanceof Element && event.target.closest(EDITABLE) !== null) return;
+      event.preventDefault();
+      input.current?.focus();
+      input.current?.select();
+    };
+    document.addEventListener("keydown", onKey);
+    return () => document.removeEventListener("keydown", onKey);
+  }, [input]);
+}

@@ -1,0 +1,98 @@
+import { memo, type ReactElement, useEffect, useRef } from "react";
+import { ripplePath, type StripCommand } from "./bead-strip-drawing.ts";
+import { temperColour } from "./temper.ts";
+
+interface PictureProps {
+  commands: readonly StripCommand[];
+  width: number;
+  height: number;
+}
+
+/** The strip as SVG: crisp at any zoom and in print. */
+export const StripSvg = memo(function StripSvg({ commands, width, height }: PictureProps): ReactElement {
+  return (
+    <svg aria-hidden="true" width={width} height={height} className="block overflow-visible">
+      {commands.map((command) =>
+        command.kind === "gap" ? (
+          <rect
+            key={`gap ${command.x}`}
+            x={command.x}
+            y={command.y}
+            width={command.width}
+            height={command.height}
+            rx="1"
+            fill="none"
+            stroke="var(--bead-outline)"
+            strokeDasharray="3 2.5"
+          />
+        ) : (
+          <path
+            key={command.station}
+            d={ripplePath(command)}
+            fill={temperColour(command.share)}
+            stroke="var(--ripple-line)"
+            strokeWidth={command.partial ? 1.2 : 0.9}
+            strokeDasharray={command.partial ? "2 2" : undefined}
+          />
+        ),
+      )}
+    </svg>
+  );
+});
+
+/** The same strip on a canvas, where SVG would need too many elements. */
+export const StripCanvas = memo(function StripCanvas({
+  commands,
+  width,
+  height,
+}: PictureProps): ReactElement {
+  const canvas = useRef<HTMLCanvasElement>(null);
+  // A canvas is painted, not rendered; it is painted again when the theme changes its colours.
+  useEffect(() => {
+    const element = canvas.current;
+    if (element === null) return undefined;
+    const paint = () => paintStrip(element, { commands, width, height });
+    paint();
+    const dark = matchMedia("(prefers-color-scheme: dark)");
+    const observer = new MutationObserver(paint);
+    observer.observe(document.documentElement, { attributeFilter: ["data-theme"] });
+    dark.addEventListener("change", paint);
+    return () => {
+      observer.disconnect();
+      dark.removeEventListener("change", paint);
+    };
+  }, [commands, width, height]);
+  return (
+    <canvas
+      ref={canvas}
+      className="block text-bead-outline [background-color:transparent]"
+      style={{ width, height, outlineColor: "var(--ripple-line)" }}
+    />
+  );
+});
+
+function paintStrip(canvas: HTMLCanvasElement, { commands, width, height }: PictureProps): void {
+  const scale = devicePixelRatio;
+  canvas.width = Math.round(width * scale);
+  canvas.height = Math.round(height * scale);
+  const context = canvas.getContext("2d");
+  if (context === null) return;
+  const style = getComputedStyle(canvas);
+  context.scale(scale, scale);
+  for (const command of commands) {
+    if (command.kind === "gap") {
+      context.strokeStyle = style.color;
+      context.lineWidth = 1;
+      context.setLineDash([3, 2.5]);
+      context.strokeRect(command.x, command.y, command.width, command.height);
+      continue;
+    }
+    const path = new Path2D(ripplePath(command));
+    context.fillStyle = temperColour(command.share);
+    context.fill(path);
+    context.strokeStyle = style.outlineColor;
+    context.lineWidth = command.partial ? 1.2 : 0.9;
+    context.setLineDash(command.partial ? [2, 2] : []);
+    context.stroke(path);
+  }
+}
