@@ -51,10 +51,7 @@ export const ArcRestart = z
   .object({
     at_s: seconds("When the arc struck again, from the log's start", 31.2),
     off_s: seconds("How long it had been out", 1.8),
-    station_mm: lengthMm(
-      "Length welded before it; null when travel and length are not known",
-      186.4,
-    ).nullable(),
+    station_mm: lengthMm("Length welded before it; null without travel speed", 186.4).nullable(),
   })
   .meta({ id: "ArcRestart" });
 export type ArcRestart = z.infer<typeof ArcRestart>;
@@ -65,9 +62,9 @@ export const PassReason = z
     quantity: z
       .enum([...PASS_QUANTITIES, "interpass_c", "heat_input_kj_mm"])
       .meta({ description: "What the reason is about", example: "voltage_v" }),
-    kind: z.enum(["mean-outside", "time-outside", "not-measured"]).meta({
+    kind: z.enum(["mean-outside", "time-outside", "methods-disagree", "not-measured"]).meta({
       description:
-        "mean-outside: the value lies outside the range; time-outside: it was outside for a share of the arc time; not-measured: the procedure limits it and the log does not say",
+        "mean-outside: the value lies outside the range; time-outside: it was outside for a share of the arc time; methods-disagree: heat input is inside by mean values and outside by the power of each sample; not-measured: the procedure limits it and the log does not say",
       example: "time-outside",
     }),
     value: z
