@@ -49,6 +49,13 @@ export const FAULT_KINDS = {
     "A value is not a number",
     "Mend the line named and send the file again.",
   ),
+  "file-row-invalid": kind(
+    422,
+    2,
+    "A row does not fit its columns",
+    "Every row needs as many columns as the header or the first row; check separator and decimal mark.",
+  ),
+  "file-compressed": kind(415, 2, "The file is compressed", "Unpack it first."),
   "file-too-large": kind(
     413,
     30,
@@ -67,6 +74,12 @@ export const FAULT_KINDS = {
     2,
     "The scan does not fit the model in the units declared",
     "Declare the unit the scan was written in: mm or in.",
+  ),
+  "scan-units-contradict": kind(
+    422,
+    2,
+    "The file names another unit than was declared",
+    "Declare the unit that the file's own names give.",
   ),
   "scan-too-few-points": kind(
     422,
