@@ -40,10 +40,13 @@ export function CursorProvider(props: { children: ReactNode }): ReactElement {
   return <CursorContext value={store}>{props.children}</CursorContext>;
 }
 
-/** The cursor's station in mm and the way to move it; alone, without a provider, a drawing has its own. */
-export function useStationCursor(): [number | null, (station_mm: number | null) => void] {
+/**
+ * The cursor's station in mm, the way to move it, and whether it is shared. Alone, without a provider, a drawing has
+ * its own, which goes when the pointer leaves; a shared one stays, as others show what is there.
+ */
+export function useStationCursor(): [number | null, (station_mm: number | null) => void, boolean] {
   const shared = useContext(CursorContext);
   const [own] = useState(cursorStore);
   const store = shared ?? own;
-  return [useSyncExternalStore(store.subscribe, store.read, store.read), store.write];
+  return [useSyncExternalStore(store.subscribe, store.read, store.read), store.write, shared !== null];
 }

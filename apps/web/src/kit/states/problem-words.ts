@@ -1,11 +1,19 @@
 import { FAULT_KINDS, type FaultCode } from "@beadroll/domain/faults/codes";
 import { Problem } from "@beadroll/domain/schemas/problem";
+import { pathOfPointer } from "../forms/json-pointer.ts";
+
+/** One fault: where it is in words, where it is as a field's path, and what is wrong. */
+export interface FaultWords {
+  readonly place: string | null;
+  readonly path: string | null;
+  readonly detail: string;
+}
 
 /** What a fault panel says: what happened, each fault with its place, what is safe and what to do. */
 export interface ProblemWords {
   readonly title: string;
   readonly detail: string;
-  readonly faults: readonly { readonly place: string | null; readonly detail: string }[];
+  readonly faults: readonly FaultWords[];
   readonly safe: string;
   readonly todo: string;
   /** The request's id, for whoever reads the server's log. */
@@ -45,7 +53,11 @@ export function problemWords(problem: Problem): ProblemWords {
   return {
     title: problem.title,
     detail: problem.detail,
-    faults: problem.errors.map((fault) => ({ place: placeOf(fault), detail: fault.detail })),
+    faults: problem.errors.map((fault) => ({
+      place: placeOf(fault),
+      path: fault.pointer === undefined ? null : pathOfPointer(fault.pointer),
+      detail: fault.detail,
+    })),
     safe: safeSentence(problem.status),
     todo: isFaultCode(code) ? FAULT_KINDS[code].help : UNKNOWN.todo,
     request_id: problem.instance,
@@ -72,5 +84,5 @@ function placeOf(fault: Problem["errors"][number]): string | null {
   if (parts.length > 0) return parts.join(", ");
   return fault.pointer === undefined || fault.pointer === ""
     ? null
-    : fault.pointer.slice(1).replaceAll("/", " / ");
+    : pathOfPointer(fault.pointer).replaceAll(".", ", ");
 }

@@ -1,4 +1,4 @@
-import { groupStations, type StripGroup, type StripStation } from "./strip-groups.ts";
+import { groupStations, type StripGroup, type StripStation, signOf } from "./strip-groups.ts";
 
 /** The place a strip is drawn in, in CSS pixels. */
 export interface StripSize {
@@ -7,6 +7,8 @@ export interface StripSize {
   /** Free room left of station 0 and right of the last, so that a strip can share an axis with a plot. */
   readonly left?: number;
   readonly right?: number;
+  /** Start and end of the seam; without it the first and last station. */
+  readonly extent_mm?: readonly [number, number];
   /** Fewest pixels from ripple to ripple; closer stations are thinned. */
   readonly pitch?: number;
 }
@@ -55,7 +57,11 @@ const GAP_MARGIN = 1.5;
 export function drawStrip(stations: readonly StripStation[], size: StripSize): StripCommand[] {
   const frame = stripFrame(stations, size);
   if (frame === null) return [];
-  const groups = groupStations(stations, Math.max(1, frame.span / (size.pitch ?? DEFAULT_PITCH)));
+  const groups = groupStations(
+    stations,
+    Math.max(1, frame.span / (size.pitch ?? DEFAULT_PITCH)),
+    size.extent_mm,
+  );
   const gaps: GapCommand[] = [];
   const ripples: RippleCommand[] = [];
   groups.forEach((group, index) => {
@@ -87,9 +93,10 @@ export function stripFrame(stations: readonly StripStation[], size: StripSize): 
   const left = size.left ?? 1;
   const span = size.width - left - (size.right ?? rx + 1);
   if (span < 1) return null;
+  const [start_mm, end_mm] = size.extent_mm ?? [first.station_mm, last.station_mm];
   return {
-    start_mm: first.station_mm,
-    end_mm: last.station_mm > first.station_mm ? last.station_mm : first.station_mm + 1,
+    start_mm,
+    end_mm: end_mm > start_mm ? end_mm : start_mm + 1,
     left,
     span,
     middle: size.height / 2,
@@ -144,8 +151,9 @@ function rippleOf(
   rx: number,
 ): RippleCommand {
   const station = group.worst ?? group.first;
-  const share = stations[station]?.share ?? 0;
-  const sign = Math.sign(stations[station]?.deviation ?? 0);
+  const shown = stations[station];
+  const share = Math.abs(shown?.share ?? 0);
+  const sign = shown === undefined ? 0 : signOf(shown);
   const x = xOfStation(frame, group.start_mm);
   return {
     kind: "ripple",

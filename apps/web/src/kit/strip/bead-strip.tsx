@@ -1,9 +1,11 @@
-import { type KeyboardEvent, type ReactElement, useMemo, useRef, useState } from "react";
+import { type KeyboardEvent, type ReactElement, type RefObject, useMemo, useRef, useState } from "react";
 import { useStationCursor } from "../cursor/cursor-context.tsx";
+import { useWidth } from "../page/use-width.ts";
 import { useLengthUnits } from "../units/units-context.tsx";
 import {
   drawStrip,
   nearestStation,
+  type StripCommand,
   type StripFrame,
   stationAtX,
   stripFrame,
@@ -13,7 +15,6 @@ import type { StripStation } from "./strip-groups.ts";
 import { StripCanvas, StripSvg } from "./strip-picture.tsx";
 import { StripReadout } from "./strip-readout.tsx";
 import { type StripUnit, stationWords, stripSummary } from "./strip-words.ts";
-import { useWidth } from "./use-width.ts";
 
 export interface BeadStripProps {
   /** In ascending order of station_mm. */
@@ -24,8 +25,10 @@ export interface BeadStripProps {
   unit?: StripUnit;
   /** row: in a table. sheet: on the seam's own page. */
   size?: "row" | "sheet";
+  /** Length of the seam, from station 0; without it the strip runs from its first to its last station. */
+  length_mm?: number;
   /** Free room at both ends, to stand on a plot's axis. */
-  inset?: { left: number; right: number };
+  inset?: { readonly left: number; readonly right: number };
   /** svg by default, canvas from a few hundred ripples on. */
   surface?: "svg" | "canvas";
   /** False inside a table: the row's arrow keys lead into it instead of Tab. */
@@ -33,22 +36,17 @@ export interface BeadStripProps {
 }
 
 const HEIGHTS = { row: 32, sheet: 84 } as const;
+const USUAL_WIDTH = 424;
 const CANVAS_FROM = 300;
 
 /** A seam as a bead: one ripple a station. Hover, tap or the arrow keys read out a station's numbers. */
 export function BeadStrip(props: BeadStripProps): ReactElement {
   const { stations, unit = "mm", size = "row" } = props;
   const holder = useRef<HTMLDivElement>(null);
-  const width = useWidth(holder, 424);
+  const { commands, frame, width } = useDrawing(props, holder);
   const units = useLengthUnits();
-  const [cursor_mm, setCursor] = useStationCursor();
+  const [cursor_mm, setCursor, isShared] = useStationCursor();
   const [isReading, setReading] = useState(false);
-  const place = useMemo(() => ({ width, height: HEIGHTS[size], ...props.inset }), [width, size, props.inset]);
-  const commands = useMemo(() => drawStrip(stations, place), [stations, place]);
-  const frame = useMemo(() => stripFrame(stations, place), [stations, place]);
-  const at = cursor_mm === null || stations.length === 0 ? null : nearestStation(stations, cursor_mm);
-  const station = at === null ? undefined : stations[at];
-  const summary = stripSummary(stations, unit, units);
   if (frame === null) {
     return (
       <div ref={holder} className="text-sm text-ash">
@@ -56,15 +54,19 @@ export function BeadStrip(props: BeadStripProps): ReactElement {
       </div>
     );
   }
+  const at = cursor_mm === null ? null : nearestStation(stations, cursor_mm);
+  const station = at === null ? undefined : stations[at];
+  const summary = stripSummary(stations, unit, units);
   const words = station === undefined ? null : stationWords(station, unit, units);
-  const Picture =
-    props.surface === "canvas" || (props.surface === undefined && commands.length > CANVAS_FROM)
-      ? StripCanvas
-      : StripSvg;
+  const Picture = props.surface === "canvas" || commands.length > CANVAS_FROM ? StripCanvas : StripSvg;
+  const goTo = (index: number) => setCursor(stations[index]?.station_mm ?? null);
   const point = (clientX: number) => {
-    const box = holder.current?.getBoundingClientRect();
-    if (box !== undefined)
-      setCursor(stations[stationAtX(frame, stations, clientX - box.left)]?.station_mm ?? null);
+    const left = holder.current?.getBoundingClientRect().left ?? 0;
+    goTo(stationAtX(frame, stations, clientX - left));
+  };
+  const stopReading = () => {
+    setReading(false);
+    if (!isShared) setCursor(null);
   };
   return (
     <div
@@ -84,21 +86,15 @@ export function BeadStrip(props: BeadStripProps): ReactElement {
       onPointerMove={(event) => point(event.clientX)}
       onPointerDown={(event) => point(event.clientX)}
       onPointerEnter={() => setReading(true)}
-      onPointerLeave={() => {
-        setReading(document.activeElement === holder.current);
-        if (document.activeElement !== holder.current) setCursor(null);
-      }}
+      onPointerLeave={() => document.activeElement !== holder.current && stopReading()}
       onFocus={() => {
         setReading(true);
-        if (cursor_mm === null) setCursor(stations[0]?.station_mm ?? null);
+        if (cursor_mm === null) goTo(0);
       }}
-      onBlur={() => {
-        setReading(false);
-        setCursor(null);
-      }}
+      onBlur={stopReading}
       onKeyDown={(event) => {
         const next = stationAfterKey(event, at ?? 0, stations.length);
-        if (next !== null) setCursor(stations[next]?.station_mm ?? null);
+        if (next !== null) goTo(next);
       }}
     >
       <Picture commands={commands} width={width} height={HEIGHTS[size]} />
@@ -112,6 +108,27 @@ export function BeadStrip(props: BeadStripProps): ReactElement {
       )}
     </div>
   );
+}
+
+/** The drawing for the place the strip has; drawn anew only when stations or place change. */
+function useDrawing(
+  props: BeadStripProps,
+  holder: RefObject<HTMLDivElement | null>,
+): { commands: readonly StripCommand[]; frame: StripFrame | null; width: number } {
+  const { stations, size = "row", length_mm, inset } = props;
+  const width = useWidth(holder, USUAL_WIDTH);
+  const left = inset?.left;
+  const right = inset?.right;
+  return useMemo(() => {
+    const place = {
+      width,
+      height: HEIGHTS[size],
+      ...(left !== undefined && { left }),
+      ...(right !== undefined && { right }),
+      ...(length_mm !== undefined && { extent_mm: [0, length_mm] as const }),
+    };
+    return { width, commands: drawStrip(stations, place), frame: stripFrame(stations, place) };
+  }, [stations, width, size, left, right, length_mm]);
 }
 
 /** The station that a key leads to, or null if the key means nothing here. */

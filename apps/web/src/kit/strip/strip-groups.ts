@@ -3,10 +3,15 @@ export interface StripStation {
   readonly station_mm: number;
   /** False where nothing could be measured; then there is no deviation and no share. */
   readonly measured: boolean;
-  /** Signed deviation, in the strip's unit. */
-  readonly deviation?: number | null | undefined;
-  /** Share of the limit used, 0 and more; above 1 is beyond it. */
+  /** Share of the limit used; beyond 1 it is beyond the limit. Without a deviation its sign is the deviation's. */
   readonly share?: number | null | undefined;
+  /** Signed deviation in the strip's unit, where it is known here; lists only know the share. */
+  readonly deviation?: number | null | undefined;
+}
+
+/** Which way a station lies: 1, -1, or 0 on the model. */
+export function signOf(station: StripStation): number {
+  return Math.sign(station.deviation ?? station.share ?? 0);
 }
 
 /** Neighbouring stations that are drawn as one ripple or as one piece of a gap. */
@@ -24,7 +29,7 @@ export interface StripGroup {
 
 /** Whether a station has numbers to draw. */
 export function isDrawable(station: StripStation): boolean {
-  return station.measured && Number.isFinite(station.deviation) && Number.isFinite(station.share);
+  return station.measured && Number.isFinite(station.share);
 }
 
 /**
@@ -33,11 +38,16 @@ export function isDrawable(station: StripStation): boolean {
  * measured, unless something measured in it is beyond the limit.
  * @param stations in ascending order of station_mm
  * @param most     1 and more; how many ripples there is room for
+ * @param extent_mm start and end of the seam; without it the first and last station
  */
-export function groupStations(stations: readonly StripStation[], most: number): StripGroup[] {
+export function groupStations(
+  stations: readonly StripStation[],
+  most: number,
+  extent_mm?: readonly [number, number],
+): StripGroup[] {
   if (!(most >= 1)) throw new RangeError(`most: expected 1 or more, got ${most}`);
   const count = Math.min(stations.length, Math.floor(most));
-  const edges = groupEdges(stations, count);
+  const edges = groupEdges(stations, count, extent_mm);
   const groups: StripGroup[] = [];
   for (let group = 0; group < count; group++) {
     const first = Math.ceil((group * stations.length) / count);
@@ -54,15 +64,19 @@ export function groupStations(stations: readonly StripStation[], most: number): 
 }
 
 /** Borders between groups, halfway between the last station of one and the first of the next. */
-function groupEdges(stations: readonly StripStation[], count: number): number[] {
-  const edges = [stations[0]?.station_mm ?? 0];
+function groupEdges(
+  stations: readonly StripStation[],
+  count: number,
+  extent_mm?: readonly [number, number],
+): number[] {
+  const edges = [extent_mm?.[0] ?? stations[0]?.station_mm ?? 0];
   for (let group = 1; group < count; group++) {
     const first = Math.ceil((group * stations.length) / count);
     const before = stations[first - 1]?.station_mm ?? 0;
     const after = stations[first]?.station_mm ?? 0;
     edges.push((before + after) / 2);
   }
-  edges.push(stations.at(-1)?.station_mm ?? 0);
+  edges.push(extent_mm?.[1] ?? stations.at(-1)?.station_mm ?? 0);
   return edges;
 }
 
@@ -80,7 +94,7 @@ function worstOf(
       unmeasured++;
       continue;
     }
-    const share = station.share ?? 0;
+    const share = Math.abs(station.share ?? 0);
     if (share > worstShare) {
       worst = index;
       worstShare = share;

@@ -1,5 +1,5 @@
 import { formatLength, formatSigned, fromMm, type LengthUnits } from "../units/length-units.ts";
-import { isDrawable, type StripStation } from "./strip-groups.ts";
+import { isDrawable, type StripStation, signOf } from "./strip-groups.ts";
 
 /** What the strip's deviations are in. */
 export type StripUnit = "mm" | "°";
@@ -14,8 +14,11 @@ export function stationWords(
   if (!isDrawable(station)) return { at, value: "not measured", share: "" };
   return {
     at,
-    value: deviationText(station.deviation ?? 0, unit, units),
-    share: shareText(station.share ?? 0),
+    value:
+      station.deviation === undefined || station.deviation === null
+        ? sideText(station)
+        : deviationText(station.deviation, unit, units),
+    share: shareText(Math.abs(station.share ?? 0)),
   };
 }
 
@@ -27,9 +30,19 @@ export function stripSummary(stations: readonly StripStation[], unit: StripUnit,
   const blindText = blind === 0 ? "" : `; ${blind} of ${stations.length} stations not measured`;
   const [first, ...rest] = measured;
   if (first === undefined) return `not measured, ${stations.length} stations`;
-  const worst = rest.reduce((most, next) => ((next.share ?? 0) > (most.share ?? 0) ? next : most), first);
+  const worst = rest.reduce((most, next) => (shareOf(next) > shareOf(most) ? next : most), first);
   const words = stationWords(worst, unit, units);
   return `largest ${words.value} at ${words.at}, ${words.share}${blindText}`;
+}
+
+function shareOf(station: StripStation): number {
+  return Math.abs(station.share ?? 0);
+}
+
+function sideText(station: StripStation): string {
+  const sign = signOf(station);
+  if (sign === 0) return "on the model";
+  return sign > 0 ? "to plus" : "to minus";
 }
 
 function deviationText(deviation: number, unit: StripUnit, units: LengthUnits): string {

@@ -16,6 +16,8 @@ export interface Column<Row> {
   readonly figures?: boolean;
   /** CSS width, such as "7rem"; one column should be left without, to take what remains. */
   readonly width?: string;
+  /** Left out where the screen is narrow. */
+  readonly wideOnly?: boolean;
   /** Shown only when somebody chooses it. */
   readonly optional?: boolean;
   /** Its head in an exported file, where the unit belongs: "largest_mm". */
@@ -69,4 +71,10 @@ export function parseSort(text: string | null): Sort | null {
   return text.startsWith("-")
     ? { column: text.slice(1), descending: true }
     : { column: text, descending: false };
+}
+
+/** The classes by which a column's head and cells keep one side and one width of screen. */
+export function columnClass<Row>(column: Column<Row>): string {
+  const side = column.align === "right" ? "text-right" : "text-left";
+  return column.wideOnly === true ? `${side} max-sm:hidden` : side;
 }

@@ -8,7 +8,7 @@ import {
   useState,
 } from "react";
 import { Link, useNavigate } from "react-router";
-import type { Column } from "./columns.ts";
+import { type Column, columnClass } from "./columns.ts";
 import { rowAfterKey } from "./row-keys.ts";
 
 interface TableBodyProps<Row> {
@@ -83,7 +83,7 @@ export function TableBody<Row>(props: TableBodyProps<Row>): ReactElement {
               {props.columns.map((column, place) => (
                 <td
                   key={column.id}
-                  className={`${props.dense ? "h-9 py-1" : "h-12 py-1.5"} px-2 ${column.align === "right" ? "text-right" : "text-left"} ${column.figures === true ? "figures whitespace-nowrap" : ""}`}
+                  className={`${props.dense ? "h-9 py-1" : "h-12 py-1.5"} px-2 ${columnClass(column)} ${column.figures === true ? "figures whitespace-nowrap" : ""}`}
                 >
                   <Cell
                     row={row}

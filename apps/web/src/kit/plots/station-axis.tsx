@@ -1,0 +1,101 @@
+import type { KeyboardEvent, ReactElement } from "react";
+import { nearestStation } from "../strip/bead-strip-drawing.ts";
+import { formatFigure, fromMm } from "../units/length-units.ts";
+import { useLengthUnits } from "../units/units-context.tsx";
+import { linearScale, pixelOf, roundTicks, tickDecimals } from "./plot-frame.ts";
+import type { PlotLayout } from "./plot-layout.ts";
+
+interface StationAxisProps {
+  label: string;
+  layout: PlotLayout;
+  extent_mm: readonly [number, number];
+  /** Stations that the cursor stops at, ascending. */
+  stations_mm: readonly number[];
+  cursor_mm: number | null;
+  onMove: (station_mm: number) => void;
+  /** All values at the cursor, read out. */
+  words: string;
+}
+
+const HEIGHT = 36;
+
+/** The axis under a stack of plots: its ticks, and the cursor as a slider for keys. */
+export function StationAxis(props: StationAxisProps): ReactElement {
+  const units = useLengthUnits();
+  const { layout, extent_mm, cursor_mm } = props;
+  const range: [number, number] = [layout.left, layout.width - layout.right];
+  const scale = linearScale([fromMm(extent_mm[0], units), fromMm(extent_mm[1], units)], range);
+  const ticks = roundTicks(scale.from[0], scale.from[1], Math.max(2, Math.floor((range[1] - range[0]) / 90)));
+  const decimals = tickDecimals((ticks[1] ?? 1) - (ticks[0] ?? 0));
+  const onKeyDown = (event: KeyboardEvent) => {
+    const next = stationAfterKey(event.key, props.stations_mm, cursor_mm);
+    if (next === null) return;
+    event.preventDefault();
+    props.onMove(next);
+  };
+  return (
+    <div
+      role="slider"
+      tabIndex={0}
+      aria-label={`Station, ${props.label}`}
+      aria-valuemin={extent_mm[0]}
+      aria-valuemax={extent_mm[1]}
+      aria-valuenow={cursor_mm ?? extent_mm[0]}
+      aria-valuetext={props.words}
+      onKeyDown={onKeyDown}
+      onFocus={() => cursor_mm === null && props.onMove(props.stations_mm[0] ?? 0)}
+      className="rounded-sm"
+    >
+      <svg aria-hidden="true" width={layout.width} height={HEIGHT} className="block overflow-visible">
+        <line x1={range[0]} x2={range[1]} y1="0.5" y2="0.5" className="stroke-ink" />
+        {ticks.map((tick) => {
+          const x = Math.round(pixelOf(scale, tick)) + 0.5;
+          return (
+            <g key={tick}>
+              <line x1={x} x2={x} y1="0" y2="5" className="stroke-ink" />
+              <text x={x} y="19" textAnchor="middle" className="fill-ash font-mono text-xs">
+                {formatFigure(tick, decimals)}
+              </text>
+            </g>
+          );
+        })}
+        <text x={range[1]} y="33" textAnchor="end" className="fill-ash text-xs">
+          {`station, ${units}`}
+        </text>
+        {cursor_mm === null ? null : (
+          <path
+            transform={`translate(${pixelOf(scale, fromMm(cursor_mm, units))} 0)`}
+            d="M0 1 5 9v5h-10v-5z"
+            className="fill-ink stroke-sheet"
+          />
+        )}
+      </svg>
+    </div>
+  );
+}
+
+/** The station that a key leads to; null if the key means nothing here. */
+export function stationAfterKey(
+  key: string,
+  stations_mm: readonly number[],
+  cursor_mm: number | null,
+): number | null {
+  const last = stations_mm.length - 1;
+  const at = nearestStation(
+    stations_mm.map((station_mm) => ({ station_mm })),
+    cursor_mm ?? 0,
+  );
+  const steps: Record<string, number> = {
+    ArrowRight: at + 1,
+    ArrowUp: at + 1,
+    ArrowLeft: at - 1,
+    ArrowDown: at - 1,
+    PageUp: at + 10,
+    PageDown: at - 10,
+    Home: 0,
+    End: last,
+  };
+  const next = steps[key];
+  if (next === undefined || last < 0) return null;
+  return stations_mm[Math.min(Math.max(next, 0), last)] ?? null;
+}
