@@ -1,7 +1,7 @@
 import { describe, expect, test } from "vitest";
 import type { Fault } from "../faults/fault.ts";
 import type { PassLog } from "./pass-log.ts";
-import { readPassLog } from "./read-pass-log.ts";
+import { PASS_LOG_BYTES_MAX, readPassLog } from "./read-pass-log.ts";
 
 const bytesOf = (text: string): Uint8Array => new TextEncoder().encode(text);
 
@@ -157,6 +157,11 @@ describe("refusing a CSV log", () => {
   test("that is no text", () => {
     const outcome = readPassLog({ name: "pass-1.xlsx", bytes: Uint8Array.of(0x50, 0x4b, 3, 4, 0, 0, 8) });
     expect(outcome.ok ? [] : outcome.faults.map((fault) => fault.code)).toEqual(["file-format-unknown"]);
+  });
+
+  test("that is larger than a log may be, without reading it", () => {
+    const outcome = readPassLog({ name: "pass-1.csv", bytes: new Uint8Array(PASS_LOG_BYTES_MAX + 1) });
+    expect(outcome.ok ? [] : outcome.faults.map((fault) => fault.code)).toEqual(["file-too-large"]);
   });
 
   test("with up to twenty faults, not hundreds", () => {

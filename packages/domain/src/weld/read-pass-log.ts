@@ -3,8 +3,8 @@ import type { PassLog } from "./pass-log.ts";
 import { readPassLogCsv } from "./read-pass-log-csv.ts";
 import { readPassLogJson } from "./read-pass-log-json.ts";
 
-/** Larger logs are refused: four hours at 1 kHz with eight columns are smaller. */
-export const PASS_LOG_BYTES_MAX = 256 * 1024 * 1024;
+/** Larger logs are refused: an hour at 500 Hz, or three minutes at 10 kHz, with five columns is smaller. */
+export const PASS_LOG_BYTES_MAX = 64 * 1024 * 1024;
 
 /** A file as it came. */
 export interface LogFile {
