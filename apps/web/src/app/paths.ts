@@ -44,7 +44,7 @@ type ParamsArgument<Name extends PageName> = [NamesIn<(typeof PATHS)[Name]["path
   ? []
   : [params: ParamsOf<Name>];
 
-/** The address of a page: `pathTo("part", { tag: "P-7K3F9Q2MX" })` is `/parts/P-7K3F9Q2MX`. */
+/** The address of a page: `pathTo("part", { tag: "P-8K3F7Q2NA" })` is `/parts/P-8K3F7Q2NA`. */
 export function pathTo<Name extends PageName>(name: Name, ...params: ParamsArgument<Name>): string {
   const path: string = PATHS[name].path;
   const values: Readonly<Record<string, string>> | undefined = params[0];

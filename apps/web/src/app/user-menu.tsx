@@ -91,7 +91,7 @@ function Choice<T extends string>(props: ChoiceProps<T>): ReactElement {
         {values.map((value) => (
           <label
             key={value}
-            className="-ml-px flex-1 cursor-pointer border border-edge px-2 py-1.5 text-center text-sm font-medium first:ml-0 first:rounded-l-sm last:rounded-r-sm has-checked:bg-act has-checked:text-on-act has-focus-visible:z-10 has-focus-visible:outline-2 has-focus-visible:outline-offset-2 has-focus-visible:outline-(--focus)"
+            className="relative -ml-px flex-1 border border-edge px-2 py-1.5 text-center text-sm font-medium first:ml-0 first:rounded-l-sm last:rounded-r-sm has-checked:bg-act has-checked:text-on-act has-focus-visible:z-10 has-focus-visible:outline-2 has-focus-visible:outline-offset-2 has-focus-visible:outline-(--focus)"
           >
             <input
               type="radio"
@@ -99,7 +99,7 @@ function Choice<T extends string>(props: ChoiceProps<T>): ReactElement {
               value={value}
               checked={props.value === value}
               onChange={() => props.onChoose(value)}
-              className="sr-only"
+              className="absolute inset-0 cursor-pointer appearance-none outline-none"
             />
             {props.options[value]}
           </label>

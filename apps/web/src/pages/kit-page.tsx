@@ -27,7 +27,7 @@ export default function KitPage(): ReactElement {
         }
         facts={
           <>
-            Drawing FW-2210 rev C · tag <TagText text="P-7K3F9Q2MX" copy /> · 6 seams, 1 on hold
+            Drawing FW-2210 rev C · tag <TagText text="P-8K3F7Q2NA" copy /> · 6 seams, 1 on hold
           </>
         }
         state={<StateMark state="on_hold" />}

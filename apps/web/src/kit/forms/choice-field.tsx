@@ -28,7 +28,7 @@ export function ChoiceField<T extends string>(props: ChoiceFieldProps<T>): React
           {props.options.map((option) => (
             <label
               key={option.value}
-              className={`-ml-px flex cursor-pointer items-center border border-edge bg-sheet font-medium first:ml-0 first:rounded-l-sm last:rounded-r-sm hover:bg-hush has-checked:border-act has-checked:bg-act has-checked:text-on-act has-focus-visible:z-10 has-focus-visible:outline-2 has-focus-visible:outline-offset-2 has-focus-visible:outline-(--focus) ${size}`}
+              className={`relative -ml-px flex items-center border border-edge bg-sheet font-medium first:ml-0 first:rounded-l-sm last:rounded-r-sm hover:bg-hush has-checked:border-act has-checked:bg-act has-checked:text-on-act has-focus-visible:z-10 has-focus-visible:outline-2 has-focus-visible:outline-offset-2 has-focus-visible:outline-(--focus) ${size}`}
             >
               <input
                 type="radio"
@@ -37,7 +37,7 @@ export function ChoiceField<T extends string>(props: ChoiceFieldProps<T>): React
                 checked={props.value === option.value}
                 aria-invalid={error === undefined ? undefined : true}
                 onChange={() => props.onChange(option.value)}
-                className="sr-only"
+                className="absolute inset-0 cursor-pointer appearance-none outline-none"
               />
               {option.label}
             </label>

@@ -6,12 +6,14 @@ export function Breadcrumbs(props: { trail: readonly { to: string; label: string
   return (
     <nav aria-label="The way here" className="screen-only mb-1 text-sm">
       <ol className="flex flex-wrap gap-x-2">
-        {props.trail.map((step) => (
-          <li key={step.to} className="flex gap-x-2">
+        {props.trail.map((step, index) => (
+          <li key={step.label} className="flex gap-x-2">
+            {index === 0 ? null : (
+              <span aria-hidden="true" className="text-ash">
+                /
+              </span>
+            )}
             <Link to={step.to}>{step.label}</Link>
-            <span aria-hidden="true" className="text-ash">
-              /
-            </span>
           </li>
         ))}
       </ol>

@@ -3,7 +3,7 @@ import { formatFigure } from "../units/length-units.ts";
 import { linearScale, pixelOf, roundTicks, tickDecimals } from "./plot-frame.ts";
 import type { PlotLayout } from "./plot-layout.ts";
 import { bandPath, blindStretches, linePath, type PlotScales } from "./plot-paths.ts";
-import { around, bandOf, type PlotSpec, plotExtent } from "./plot-spec.ts";
+import { around, bandOf, type PlotBand, type PlotSpec, plotExtent } from "./plot-spec.ts";
 
 interface PictureProps {
   spec: PlotSpec;
@@ -86,12 +86,38 @@ function Limits(props: { spec: PlotSpec; scales: PlotScales; layout: PlotLayout 
             {[top, bottom].map((y) => (
               <line key={y} x1={left} x2={right} y1={y} y2={y} stroke="currentColor" strokeDasharray={dash} />
             ))}
-            {layout.right < 40 ? null : (
-              <text x={right + 8} y={top + 4} fill="currentColor" className="text-xs">
-                {`${band.word} ${limitText(props.spec, band.high)}`}
-              </text>
-            )}
           </g>
+        );
+      })}
+      {layout.right < 40 ? null : (
+        <LimitWords spec={props.spec} bands={bands} scales={scales} x={right + 8} />
+      )}
+    </>
+  );
+}
+
+/** The limits' words right of the plot, each at its upper edge, pushed apart where they would touch. */
+function LimitWords(props: {
+  spec: PlotSpec;
+  bands: readonly PlotBand[];
+  scales: PlotScales;
+  x: number;
+}): ReactElement {
+  const sorted = [...props.bands].sort((a, b) => b.high - a.high);
+  let last = Number.NEGATIVE_INFINITY;
+  return (
+    <>
+      {sorted.map((band) => {
+        last = Math.max(pixelOf(props.scales.y, band.high) + 4, last + 13);
+        return (
+          <text
+            key={`${band.kind} ${band.word}`}
+            x={props.x}
+            y={last}
+            className={`text-xs ${band.kind === "within" ? "fill-good" : "fill-attend"}`}
+          >
+            {`${band.word} ${limitText(props.spec, band.high)}`}
+          </text>
         );
       })}
     </>
@@ -105,7 +131,7 @@ function limitText(spec: PlotSpec, value: number): string {
 function ValueTicks(props: { spec: PlotSpec; scales: PlotScales; layout: PlotLayout }): ReactElement {
   const { scales, layout } = props;
   const [low, high] = scales.y.from;
-  const ticks = roundTicks(low, high, 3);
+  const ticks = roundTicks(low, high, 4);
   const decimals = tickDecimals((ticks[1] ?? 1) - (ticks[0] ?? 0));
   return (
     <g className="stroke-row">

@@ -44,55 +44,58 @@ export function PlotStack(props: PlotStackProps): ReactElement {
     const place_mm = valueAt(scale, event.clientX - box.left);
     setCursor(nearestOf(stations_mm, place_mm));
   };
-  return (
-    <div className="min-w-0">
-      <div className="screen-only -mt-1 mb-1 flex justify-end">
-        <Button kind="quiet" aria-pressed={isTable} onClick={() => setTable(!isTable)}>
-          {isTable ? "Show as plots" : "Show as table"}
-        </Button>
-      </div>
-      {isTable ? (
+  const toggle = <TableToggle isTable={isTable} onToggle={() => setTable(!isTable)} />;
+  if (isTable) {
+    return (
+      <div className="min-w-0">
+        {toggle}
         <PlotTable label={props.label} specs={specs} stations_mm={stations_mm} units={units} />
-      ) : (
-        <div onPointerMove={point} onPointerDown={point} className="touch-pan-y">
-          <div className="kit-plot-row">
-            <div />
-            <div ref={holder} className="min-w-0">
-              {props.above?.(layout)}
-              <StationMarks
-                marks={props.marks ?? []}
-                layout={layout}
-                extent_mm={extent_mm}
-                onPick={setCursor}
-              />
-            </div>
-          </div>
-          {specs.map((spec) => (
-            <PlotRow
-              key={spec.id}
-              spec={spec}
-              layout={layout}
-              height={props.height ?? 84}
-              extent_mm={extent_mm}
-              cursor_mm={cursor_mm}
-            />
-          ))}
-          <div className="kit-plot-row">
-            <div className="figures text-ash max-md:hidden">
-              {cursor_mm === null ? null : `at ${formatLength(cursor_mm, units, 1)}`}
-            </div>
-            <StationAxis
-              label={props.label}
-              layout={layout}
-              extent_mm={extent_mm}
-              stations_mm={stations_mm}
-              cursor_mm={cursor_mm}
-              onMove={setCursor}
-              words={cursorWords(specs, cursor_mm, units)}
-            />
-          </div>
+      </div>
+    );
+  }
+  return (
+    <div onPointerMove={point} onPointerDown={point} className="min-w-0 touch-pan-y">
+      <div className="kit-plot-row">
+        {toggle}
+        <div ref={holder} className="min-w-0">
+          {props.above?.(layout)}
+          <StationMarks marks={props.marks ?? []} layout={layout} extent_mm={extent_mm} onPick={setCursor} />
         </div>
-      )}
+      </div>
+      {specs.map((spec) => (
+        <PlotRow
+          key={spec.id}
+          spec={spec}
+          layout={layout}
+          height={props.height ?? 84}
+          extent_mm={extent_mm}
+          cursor_mm={cursor_mm}
+        />
+      ))}
+      <div className="kit-plot-row">
+        <div className="figures text-ash max-md:hidden">
+          {cursor_mm === null ? null : `at ${formatLength(cursor_mm, units, 1)}`}
+        </div>
+        <StationAxis
+          label={props.label}
+          layout={layout}
+          extent_mm={extent_mm}
+          stations_mm={stations_mm}
+          cursor_mm={cursor_mm}
+          onMove={setCursor}
+          words={cursorWords(specs, cursor_mm, units)}
+        />
+      </div>
+    </div>
+  );
+}
+
+function TableToggle(props: { isTable: boolean; onToggle: () => void }): ReactElement {
+  return (
+    <div className="screen-only -ml-4">
+      <Button kind="quiet" onClick={props.onToggle}>
+        {props.isTable ? "Show as plots" : "Show as table"}
+      </Button>
     </div>
   );
 }

@@ -90,7 +90,7 @@ function Drawing(props: { section: Section; frame: SectionFrame }): ReactElement
             key={plate.plate}
             d={polyline([plate.from, plate.to], frame)}
             className="fill-none stroke-ink"
-            strokeWidth="2"
+            strokeWidth="1.25"
           />
         ))}
         {section.root === null ? null : <Root root={section.root} frame={frame} />}

@@ -17,6 +17,14 @@ const COLOURS = { attend: "text-attend", stop: "text-stop", plain: "text-ash" } 
 /** Width kept free for a mark's words before the next goes a line lower. */
 const WORDS_PX = 150;
 const LINE_PX = 22;
+const ICON_PX = 8;
+
+/** Where a mark stands: its x, its line from the top, and whether its words go to the left. */
+export interface MarkPlace {
+  readonly x: number;
+  readonly line: number;
+  readonly isLate: boolean;
+}
 
 /** Marks above the plots, each with its word at its station; a press takes the cursor there. */
 export function StationMarks(props: {
@@ -28,17 +36,20 @@ export function StationMarks(props: {
   if (props.marks.length === 0) return null;
   const { layout } = props;
   const scale = linearScale(props.extent_mm, [layout.left, layout.width - layout.right]);
-  const placed = placeMarks(props.marks.map((mark) => pixelOf(scale, mark.station_mm)));
+  const placed = placeMarks(
+    props.marks.map((mark) => pixelOf(scale, mark.station_mm)),
+    layout.width,
+  );
   const lines = Math.max(...placed.map((place) => place.line)) + 1;
   return (
     <ul className="relative" style={{ height: lines * LINE_PX + 4 }}>
       {props.marks.map((mark, index) => {
-        const isLate = (placed[index]?.x ?? 0) > layout.width - WORDS_PX;
+        const { x, line, isLate } = placed[index] ?? { x: 0, line: 0, isLate: false };
         return (
           <li
             key={`${mark.station_mm} ${mark.label}`}
             className={`absolute ${isLate ? "-translate-x-[calc(100%-6px)]" : "-translate-x-1.5"}`}
-            style={{ left: placed[index]?.x ?? 0, top: (placed[index]?.line ?? 0) * LINE_PX }}
+            style={{ left: x, top: line * LINE_PX }}
           >
             <button
               type="button"
@@ -55,13 +66,19 @@ export function StationMarks(props: {
   );
 }
 
-/** A line for each mark so that the words of neighbours do not run into each other. */
-export function placeMarks(xs: readonly number[]): { x: number; line: number }[] {
-  const ends: number[] = [];
+/**
+ * A line for each mark so that the words of neighbours do not run into each other. Words stand right of their mark,
+ * or left of it where the plot ends.
+ */
+export function placeMarks(xs: readonly number[], width: number): MarkPlace[] {
+  const taken: { line: number; from: number; until: number }[] = [];
   return xs.map((x) => {
-    const free = ends.findIndex((end) => end <= x);
-    const line = free < 0 ? ends.length : free;
-    ends[line] = x + WORDS_PX;
-    return { x, line };
+    const isLate = x > width - WORDS_PX;
+    const from = isLate ? x - WORDS_PX : x - ICON_PX;
+    const until = isLate ? x + ICON_PX : x + WORDS_PX;
+    let line = 0;
+    while (taken.some((other) => other.line === line && other.from < until && from < other.until)) line++;
+    taken.push({ line, from, until });
+    return { x, line, isLate };
   });
 }

@@ -1,7 +1,6 @@
 import { type ReactElement, useState } from "react";
 import { Sheet } from "../page/sheet.tsx";
 import { Tabs } from "../page/tabs.tsx";
-import { TagText } from "../page/tag-text.tsx";
 import { EmptyState } from "../states/empty-state.tsx";
 import { StateMark } from "../states/state-mark.tsx";
 import { BeadStrip } from "../strip/bead-strip.tsx";
@@ -28,7 +27,7 @@ const COLUMNS: readonly Column<ListedSeam>[] = [
     id: "part",
     head: "Part",
     value: (row) => row.part,
-    cell: (row) => <TagText text={row.part} />,
+
     width: "10rem",
   },
   { id: "seam", head: "Seam", value: (row) => row.seam, figures: true, width: "3.25rem" },

@@ -17,7 +17,7 @@ export function Loading(props: LoadingProps): ReactElement {
         {rows.map((row) => (
           <div
             key={row}
-            className="h-5 animate-pulse rounded-r-full rounded-l-sm border border-dashed border-rule bg-hush"
+            className="h-5 animate-pulse rounded-r-full rounded-l-sm border border-dashed border-edge/60 bg-hush"
             style={{ width: `${92 - ((row * 17) % 40)}%` }}
           />
         ))}

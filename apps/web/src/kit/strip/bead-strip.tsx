@@ -81,7 +81,7 @@ export function BeadStrip(props: BeadStripProps): ReactElement {
       aria-valuetext={
         words === null ? summary : [words.at, words.value, words.share].filter(Boolean).join(", ")
       }
-      className="relative min-w-0 touch-pan-y rounded-sm"
+      className="relative min-w-32 touch-pan-y rounded-sm"
       style={{ height: HEIGHTS[size] }}
       onPointerMove={(event) => point(event.clientX)}
       onPointerDown={(event) => point(event.clientX)}

@@ -8,10 +8,16 @@ interface PictureProps {
   height: number;
 }
 
+/** All ripples as one path: drawn first and wider, it stays as the bead's outline, 3:1 against the ground. */
+function beadOutline(commands: readonly StripCommand[]): string {
+  return commands.map((command) => (command.kind === "ripple" ? ripplePath(command) : "")).join("");
+}
+
 /** The strip as SVG: crisp at any zoom and in print. */
 export const StripSvg = memo(function StripSvg({ commands, width, height }: PictureProps): ReactElement {
   return (
-    <svg aria-hidden="true" width={width} height={height} className="block overflow-visible">
+    <svg aria-hidden="true" width={width} height={height} className="absolute top-0 left-0 overflow-visible">
+      <path d={beadOutline(commands)} fill="none" stroke="var(--bead-outline)" strokeWidth="2" />
       {commands.map((command) =>
         command.kind === "gap" ? (
           <rect
@@ -65,7 +71,7 @@ export const StripCanvas = memo(function StripCanvas({
   return (
     <canvas
       ref={canvas}
-      className="block text-bead-outline [background-color:transparent]"
+      className="absolute top-0 left-0 text-bead-outline"
       style={{ width, height, outlineColor: "var(--ripple-line)" }}
     />
   );
@@ -79,6 +85,9 @@ function paintStrip(canvas: HTMLCanvasElement, { commands, width, height }: Pict
   if (context === null) return;
   const style = getComputedStyle(canvas);
   context.scale(scale, scale);
+  context.strokeStyle = style.color;
+  context.lineWidth = 2;
+  context.stroke(new Path2D(beadOutline(commands)));
   for (const command of commands) {
     if (command.kind === "gap") {
       context.strokeStyle = style.color;

@@ -23,7 +23,10 @@ export function TemperLegend(props: { of?: string }): ReactElement {
         ))}
         <rect x={100 * LIMIT_AT} width={100 * (1 - LIMIT_AT)} height="10" fill={temperColour(1.01)} />
       </svg>
-      <div aria-hidden="true" className="relative mt-1 flex justify-between text-xs text-ash">
+      <div
+        aria-hidden="true"
+        className="relative mt-1 flex justify-between text-xs whitespace-nowrap text-ash"
+      >
         <span>on the model</span>
         <span className="absolute -translate-x-1/2" style={{ left: `${50 * LIMIT_AT}%` }}>
           half the limit
