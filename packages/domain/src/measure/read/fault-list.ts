@@ -34,7 +34,7 @@ export class FaultList {
    */
   add(code: FaultCode, what: string, place: FaultPlace = {}): void {
     if (this.full) return;
-    this.faults.push({ code, detail: `${this.file}${placeWords(place)}: ${what}`, ...place });
+    this.faults.push({ code, detail: `${this.file}${comma(place)}: ${what}`, ...place });
   }
 
   /** The list as a refusal. */
@@ -43,11 +43,16 @@ export class FaultList {
   }
 }
 
-function placeWords(place: FaultPlace): string {
-  if (place.line !== undefined) return `, line ${place.line}`;
-  if (place.byte !== undefined) return `, byte ${place.byte}`;
-  if (place.pointer !== undefined) return `, ${place.pointer}`;
-  return "";
+function comma(place: FaultPlace): string {
+  const words = placeWords(place);
+  return words === "" ? "" : `, ${words}`;
+}
+
+/** A place as a sentence names it; empty where there is none. */
+export function placeWords({ line, byte, pointer }: FaultPlace): string {
+  if (line !== undefined) return `line ${line}`;
+  if (byte !== undefined) return `byte ${byte}`;
+  return pointer ?? "";
 }
 
 /** A piece of a file as a fault quotes it: short, printable, in double quotes. */

@@ -4,12 +4,17 @@ import type { OpenFile, ScanFile, ScanInput } from "./scan-input.ts";
 import { isBlankText, isGzip } from "./sniff-format.ts";
 import { afterByteOrderMark } from "./text/bytes.ts";
 
+/** Bytes that a file may have, unpacked: 1 GiB. */
+const MAX_BYTES = 2 ** 30;
+
 /** Opens a file: unpacks it where it is packed, and notes as a fault that it is empty or cannot be unpacked. */
 export function openFile(file: ScanFile, units: LengthUnit, gunzip: ScanInput["gunzip"]): OpenFile {
   const faults = new FaultList(file.name);
   const bytes = unpacked(file.bytes, gunzip, faults);
   const from = afterByteOrderMark(bytes);
-  if (!faults.any && isBlankText(bytes, from)) {
+  if (bytes.length > MAX_BYTES) {
+    faults.add("file-too-large", `it has ${bytes.length} bytes, at most ${MAX_BYTES} are read`);
+  } else if (!faults.any && isBlankText(bytes, from)) {
     faults.add("file-empty", bytes.length === 0 ? "it has no byte" : "it holds only blanks");
   }
   return { name: file.name.replace(/\.gz$/i, ""), bytes, from, units, faults };

@@ -4,7 +4,8 @@ import { MAX_FAULTS } from "./fault-list.ts";
 import { openFile } from "./open-file.ts";
 import { readPcd } from "./pcd/read-pcd.ts";
 import { readPly } from "./ply/read-ply.ts";
-import { PointSink } from "./point-sink.ts";
+import { MAX_POINTS, PointSink } from "./point-sink.ts";
+import { readProfilesJson } from "./profiles/read-profiles-json.ts";
 import { readTable } from "./read-table.ts";
 import type { OpenFile, ScanInput } from "./scan-input.ts";
 import { sniffFormat } from "./sniff-format.ts";
@@ -22,6 +23,7 @@ export function readScan(input: ScanInput): Outcome<ScanCloud> {
   const scan = openFile(input, units, gunzip);
   const poses = input.poses === undefined ? null : openFile(input.poses, input.poses_units ?? units, gunzip);
   const sink = scan.faults.any ? new PointSink(false) : readFormat(scan, poses);
+  if (sink.isOver) scan.faults.add("file-too-large", `it holds more than ${MAX_POINTS} points`);
   const found = [...(poses?.faults.faults ?? []), ...scan.faults.faults];
   if (found.length > 0) return refused(...found.slice(0, MAX_FAULTS));
   if (sink.count > 0) return good(sink.cloud());
@@ -40,7 +42,7 @@ function readFormat(scan: OpenFile, poses: OpenFile | null): PointSink {
     case "table":
       return readTable(scan, poses);
     case "json":
-      return refuse(scan, "JSON");
+      return readProfilesJson(scan, poses);
     case "gzip":
       return refuse(scan, "a gzip file inside a gzip file");
     case "utf16":

@@ -3,15 +3,15 @@ import { readPoses } from "./profiles/read-poses.ts";
 import { readProfiles } from "./profiles/read-profiles.ts";
 import type { OpenFile } from "./scan-input.ts";
 import { hasColumn } from "./text/column-names.ts";
-import { readXyz } from "./text/read-xyz.ts";
 import { tableLayout } from "./text/table-layout.ts";
+import { readXyz } from "./xyz/read-xyz.ts";
 
 /**
  * Reads a text of numbers: profiles where its columns are a station (or the profile's number), x and z, with the
  * poses beside them; else a cloud.
  */
 export function readTable(scan: OpenFile, poses: OpenFile | null): PointSink {
-  const layout = tableLayout(scan.bytes, scan.from);
+  const layout = tableLayout(scan);
   const { names } = layout;
   const has = (base: string): boolean => names !== null && hasColumn(names, base);
   const key = has("station") ? "station" : "profile";

@@ -22,33 +22,27 @@ export interface StridedPoints {
 
 /** Reads all points into the sink; the caller has made sure that the bytes are there. */
 export function readStrided(points: StridedPoints, sink: PointSink): void {
-  if (points.xyz.every(({ scalar }) => scalar.isFloat32)) readFloats(points, sink);
-  else readAny(points, sink);
+  const xyz_mm = sink.room(points.count);
+  if (xyz_mm === null) return;
+  if (points.xyz.every(({ scalar }) => scalar.isFloat32)) readFloats(points, xyz_mm);
+  else readAny(points, xyz_mm);
+  sink.fill(points.count);
 }
 
 /** The usual case apart: three 32-bit floats, read without a call through a table. */
-function readFloats({ bytes, count, little, scale, xyz }: StridedPoints, sink: PointSink): void {
+function readFloats({ bytes, count, little, scale, xyz }: StridedPoints, xyz_mm: Float64Array): void {
   const view = viewOf(bytes);
   const [x, y, z] = xyz;
   for (let i = 0; i < count; i++) {
-    sink.add(
-      view.getFloat32(x.at + i * x.stride, little) * scale,
-      view.getFloat32(y.at + i * y.stride, little) * scale,
-      view.getFloat32(z.at + i * z.stride, little) * scale,
-      0,
-    );
+    xyz_mm[3 * i] = view.getFloat32(x.at + i * x.stride, little) * scale;
+    xyz_mm[3 * i + 1] = view.getFloat32(y.at + i * y.stride, little) * scale;
+    xyz_mm[3 * i + 2] = view.getFloat32(z.at + i * z.stride, little) * scale;
   }
 }
 
-function readAny({ bytes, count, little, scale, xyz }: StridedPoints, sink: PointSink): void {
+function readAny({ bytes, count, little, scale, xyz }: StridedPoints, xyz_mm: Float64Array): void {
   const view = viewOf(bytes);
-  const [x, y, z] = xyz;
-  for (let i = 0; i < count; i++) {
-    sink.add(
-      x.scalar.read(view, x.at + i * x.stride, little) * scale,
-      y.scalar.read(view, y.at + i * y.stride, little) * scale,
-      z.scalar.read(view, z.at + i * z.stride, little) * scale,
-      0,
-    );
-  }
+  xyz.forEach(({ scalar, at, stride }, axis) => {
+    for (let i = 0; i < count; i++) xyz_mm[3 * i + axis] = scalar.read(view, at + i * stride, little) * scale;
+  });
 }

@@ -12,7 +12,9 @@ import {
   UINT32,
   UINT64,
 } from "../scalar.ts";
+import type { OpenFile } from "../scan-input.ts";
 import { HeaderLines, wholeNumber } from "../text/header-lines.ts";
+import { checkCommentUnit } from "../text/unit-comment.ts";
 
 /** How the body is written. */
 export type PcdData = "ascii" | "binary" | "binary_compressed";
@@ -81,7 +83,8 @@ export function isPcdLine(text: string): boolean {
  * @returns null where it has faults, each noted with its line
  * Source: the PCD format, version 0.7.
  */
-export function readPcdHeader(bytes: Uint8Array, from: number, faults: FaultList): PcdHeader | null {
+export function readPcdHeader(file: OpenFile): PcdHeader | null {
+  const { bytes, from, faults } = file;
   const lines = new HeaderLines(bytes, from);
   const entries = new Map<string, Entry>();
   while (!entries.has("DATA")) {
@@ -93,6 +96,7 @@ export function readPcdHeader(bytes: Uint8Array, from: number, faults: FaultList
       faults.add("file-header-invalid", what, { line: lines.line });
       return null;
     }
+    if (text.startsWith("#")) checkCommentUnit(text, lines.line, file);
     if (text === "" || text.startsWith("#")) continue;
     const keyword = words[0] === "COLUMNS" ? "FIELDS" : words[0]!;
     entries.set(keyword, { words: words.slice(1), line: lines.line });

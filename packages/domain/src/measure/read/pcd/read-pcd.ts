@@ -6,8 +6,12 @@ import { readStrided, type StridedField } from "../strided-points.ts";
 import { BLANK, DOT } from "../text/bytes.ts";
 import { findColumns } from "../text/column-names.ts";
 import { NumberRows } from "../text/number-rows.ts";
+import { rowsExpected } from "../text/rows-expected.ts";
 import { LZF_MAX_RATIO, unpackLzf } from "./lzf.ts";
 import { type PcdField, type PcdHeader, readPcdHeader } from "./pcd-header.ts";
+
+/** Bytes that a packed body may have unpacked: 1 GiB. */
+const MAX_UNPACKED = 2 ** 30;
 
 /** A PCD file whose header is read. */
 interface PcdBody {
@@ -22,12 +26,17 @@ interface PcdBody {
 /**
  * Reads a PCD file: ascii, binary or binary_compressed. Fields beside x, y, z and the VIEWPOINT are passed over.
  */
-export function readPcd({ bytes, from, units, faults }: OpenFile): PointSink {
-  const header = readPcdHeader(bytes, from, faults);
+export function readPcd(file: OpenFile): PointSink {
+  const { bytes, units, faults } = file;
+  const header = readPcdHeader(file);
   if (header === null) return new PointSink(false);
   const names = header.fields.map(({ name }) => name);
   const wanted = ["x", "y", "z"].map((base) => ({ base, isLength: true }));
-  const columns = findColumns({ names, units, line: header.fieldsLine }, wanted, faults);
+  const columns = findColumns(
+    { names, units, place: { line: header.fieldsLine }, noun: "field" },
+    wanted,
+    faults,
+  );
   if (columns === null) return new PointSink(false);
   for (const column of columns) {
     const { name, count } = header.fields[column]!;
@@ -61,6 +70,7 @@ function readAscii({ bytes, header, columns, scale }: PcdBody, faults: FaultList
   }));
   const rows = new NumberRows(source, numbers, starts.at(-1)!, faults);
   const { values } = rows;
+  sink.reserve(Math.min(points, rowsExpected(bytes, header.bodyAt)));
   while (rows.next()) {
     if (rows.lost) sink.lose();
     else sink.add(values[0]! * scale, values[1]! * scale, values[2]! * scale, 0);
@@ -116,7 +126,7 @@ function readBlock(
   { bytes, columns, count, scale }: Block,
   field: (column: number) => StridedField,
 ): PointSink {
-  const sink = new PointSink(false, count);
+  const sink = new PointSink(false);
   const xyz = [field(columns[0]!), field(columns[1]!), field(columns[2]!)] as const;
   readStrided({ bytes, count, little: true, scale, xyz }, sink);
   return sink;
@@ -142,6 +152,11 @@ function unpackBody(bytes: Uint8Array, at: number, expected: number, faults: Fau
   if (size !== expected || size > packed * LZF_MAX_RATIO) {
     const what = `the packed block says ${size} bytes unpacked where the header needs ${expected}`;
     faults.add("file-header-invalid", what, { byte: at + 4 });
+    return null;
+  }
+  if (size > MAX_UNPACKED) {
+    const what = `the packed block says ${size} bytes unpacked, at most ${MAX_UNPACKED} are read`;
+    faults.add("file-too-large", what, { byte: at + 4 });
     return null;
   }
   const plain = new Uint8Array(size);

@@ -7,9 +7,9 @@ import type { PlyElement } from "./ply-header.ts";
 
 /** Reads a binary body: elements in the order of the header, each record without gaps. */
 export function readPlyBinary(body: PlyBody, faults: FaultList): PointSink {
-  const { bytes, header, vertex } = body;
+  const { bytes, header } = body;
   const little = header.format === "binary_little_endian";
-  const sink = new PointSink(false, Math.min(vertex.count, bytes.length));
+  const sink = new PointSink(false);
   let at = header.bodyAt;
   for (const element of header.elements) {
     const next = isFixed(element)

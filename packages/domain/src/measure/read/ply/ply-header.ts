@@ -1,6 +1,8 @@
 import { type FaultList, quoted } from "../fault-list.ts";
 import { FLOAT32, FLOAT64, INT8, INT16, INT32, type Scalar, UINT8, UINT16, UINT32 } from "../scalar.ts";
+import type { OpenFile } from "../scan-input.ts";
 import { HeaderLines, wholeNumber } from "../text/header-lines.ts";
+import { checkCommentUnit } from "../text/unit-comment.ts";
 
 /** How the body is written. */
 export type PlyFormat = "ascii" | "binary_little_endian" | "binary_big_endian";
@@ -56,7 +58,8 @@ const FORMATS: readonly string[] = ["ascii", "binary_little_endian", "binary_big
  * @returns null where it has faults, each noted with its line
  * Source: G. Turk, The PLY Polygon File Format (1994), version 1.0; sized type names as later programs write them.
  */
-export function readPlyHeader(bytes: Uint8Array, from: number, faults: FaultList): PlyHeader | null {
+export function readPlyHeader(file: OpenFile): PlyHeader | null {
+  const { bytes, from, faults } = file;
   const lines = new HeaderLines(bytes, from);
   if (lines.next() !== "ply") {
     faults.add("file-header-invalid", `the first line must be "ply"`, { line: 1 });
@@ -72,6 +75,7 @@ export function readPlyHeader(bytes: Uint8Array, from: number, faults: FaultList
     }
     const words = text.split(/\s+/);
     if (text === "end_header") break;
+    if (words[0] === "comment" || words[0] === "obj_info") checkCommentUnit(text, lines.line, file);
     if (words[0] === "format") format = readFormat(words, lines.line, faults);
     else if (!readLine(words, elements, lines.line, faults)) return null;
   }

@@ -8,8 +8,9 @@ import { readPlyHeader } from "./ply-header.ts";
 /**
  * Reads the vertices of a PLY file, ascii or binary; every other element and property is passed over.
  */
-export function readPly({ bytes, from, units, faults }: OpenFile): PointSink {
-  const header = readPlyHeader(bytes, from, faults);
+export function readPly(file: OpenFile): PointSink {
+  const { bytes, units, faults } = file;
+  const header = readPlyHeader(file);
   const none = new PointSink(false);
   if (header === null) return none;
   const vertex = header.elements.find(({ name }) => name === "vertex");
@@ -19,7 +20,11 @@ export function readPly({ bytes, from, units, faults }: OpenFile): PointSink {
   }
   const names = vertex.properties.map(({ name }) => name);
   const wanted = ["x", "y", "z"].map((base) => ({ base, isLength: true }));
-  const columns = findColumns({ names, units, line: vertex.line }, wanted, faults);
+  const columns = findColumns(
+    { names, units, place: { line: vertex.line }, noun: "property" },
+    wanted,
+    faults,
+  );
   if (columns === null) return none;
   const list = columns.find((column) => vertex.properties[column]!.count !== null);
   if (list !== undefined) {

@@ -1,26 +1,17 @@
+import { type FaultList, placeWords } from "../fault-list.ts";
+import type { ProfileKey } from "./profile-key.ts";
+import type { SensorPose } from "./sensor-pose.ts";
+
 /** Numbers kept a pose: the point, then the sensor's x and z axes in the part frame. */
 const PER_POSE = 9;
 
-/** Stations that differ by less are the same station, in mm: files round them differently. */
+/** Stations that differ by no more are the same station, in mm: files round them differently. */
 export const STATION_TOLERANCE_MM = 1e-3;
-
-/** Where the sensor stood at one profile. */
-export interface SensorPose {
-  /** Station in mm, or the profile's number. */
-  readonly key: number;
-  readonly point_mm: readonly [number, number, number];
-  /** Unit quaternion w, x, y, z: turns the sensor frame into the part frame. */
-  readonly quaternion: readonly [number, number, number, number];
-  /** 1-based line, 0 where there is none. */
-  readonly line: number;
-}
 
 /** The poses of one scan in ascending order of their key, ready to carry points into the part frame. */
 export class PoseSet {
-  /** Keys, ascending. */
+  /** Keys, ascending: stations in mm, or numbers of profiles. */
   readonly keys: Float64Array;
-  /** Line of each pose in its file, by the same order. */
-  readonly lines: Int32Array;
   readonly #frames: Float64Array;
   readonly #tolerance: number;
   /** The last point carried, mm, part frame. */
@@ -28,13 +19,11 @@ export class PoseSet {
   y_mm = 0;
   z_mm = 0;
 
-  /** @param tolerance keys that differ by no more are the same */
-  constructor(poses: readonly SensorPose[], tolerance: number) {
-    const sorted = poses.toSorted((a, b) => a.key - b.key);
+  /** @param sorted ascending by key */
+  constructor(sorted: readonly SensorPose[], key: ProfileKey) {
     this.keys = Float64Array.from(sorted, (pose) => pose.key);
-    this.lines = Int32Array.from(sorted, (pose) => pose.line);
     this.#frames = new Float64Array(PER_POSE * sorted.length);
-    this.#tolerance = tolerance;
+    this.#tolerance = key === "station" ? STATION_TOLERANCE_MM : 0;
     sorted.forEach((pose, i) => {
       this.#frames.set(frameOf(pose), PER_POSE * i);
     });
@@ -52,7 +41,7 @@ export class PoseSet {
     }
     const after = low < keys.length ? keys[low]! - key : Number.POSITIVE_INFINITY;
     const before = low > 0 ? key - keys[low - 1]! : Number.POSITIVE_INFINITY;
-    if (Math.min(after, before) > this.#tolerance) return -1;
+    if (!(Math.min(after, before) <= this.#tolerance)) return -1;
     return after <= before ? low : low - 1;
   }
 
@@ -64,6 +53,19 @@ export class PoseSet {
     this.y_mm = f[at + 1]! + f[at + 4]! * x_mm + f[at + 7]! * z_mm;
     this.z_mm = f[at + 2]! + f[at + 5]! * x_mm + f[at + 8]! * z_mm;
   }
+}
+
+/** The set of these poses; null, with a fault each, where two have the same key or there is none at all. */
+export function poseSetOf(poses: readonly SensorPose[], key: ProfileKey, faults: FaultList): PoseSet | null {
+  const sorted = poses.toSorted((a, b) => a.key - b.key);
+  if (sorted.length === 0) faults.add("scan-poses-missing", "it holds no pose");
+  for (let i = 1; i < sorted.length; i++) {
+    const [first, second] = [sorted[i - 1]!, sorted[i]!];
+    if (first.key !== second.key) continue;
+    const what = `a second pose for ${key} ${second.key}; the first stands at ${placeWords(first.place)}`;
+    faults.add("scan-pose-invalid", what, { ...second.place, field: key });
+  }
+  return faults.any ? null : new PoseSet(sorted, key);
 }
 
 /** Point, x axis and z axis of a pose; the axes are columns 1 and 3 of the quaternion's rotation matrix. */

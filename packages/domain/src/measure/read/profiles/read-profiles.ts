@@ -1,82 +1,68 @@
-import type { FaultList } from "../fault-list.ts";
 import { MM_PER, PointSink } from "../point-sink.ts";
 import type { OpenFile } from "../scan-input.ts";
 import { findColumns } from "../text/column-names.ts";
 import { NumberRows } from "../text/number-rows.ts";
+import { rowsExpected } from "../text/rows-expected.ts";
 import type { TableLayout } from "../text/table-layout.ts";
+import { PoseJoin } from "./pose-join.ts";
 import type { PoseSet } from "./pose-set.ts";
-import type { ProfileKey } from "./read-poses.ts";
+import { keyColumn, keyScale, type ProfileKey } from "./profile-key.ts";
 
-/** The profiles' table and how it is written. */
-export interface ProfilesSource {
+/** A table of profiles whose layout is known. */
+export interface ProfilesTable {
   readonly layout: TableLayout;
   readonly names: readonly string[];
   readonly key: ProfileKey;
 }
 
+const ALLOWS = ["number", "nan", "empty"] as const;
+
 /**
  * Reads profiles (key, x, z: one row a return) and carries each return into the part frame.
  * @param poses null where they could not be read: the profiles are then only checked
  */
-export function readProfiles(
-  { layout, names, key }: ProfilesSource,
-  poses: PoseSet | null,
-  { units, faults }: OpenFile,
-): PointSink {
+export function readProfiles(table: ProfilesTable, poses: PoseSet | null, file: OpenFile): PointSink {
+  const { layout, names, key } = table;
+  const { units, faults } = file;
   const sink = new PointSink(true);
-  const wanted = [
-    { base: key, isLength: key === "station" },
-    ...["x", "z"].map((base) => ({ base, isLength: true })),
-  ];
-  const found = findColumns({ names, units, line: layout.namesLine }, wanted, faults);
+  const wanted = [keyColumn(key), ...["x", "z"].map((base) => ({ base, isLength: true }))];
+  const header = { names, units, place: { line: layout.namesLine }, noun: "column" as const };
+  const found = findColumns(header, wanted, faults);
   if (found === null) return sink;
-  const allows = ["number", "nan", "empty"] as const;
-  const columns = found.map((index, i) => ({ index, name: names[index]!, allows: allows[i]! }));
+  const columns = found.map((index, i) => ({ index, name: names[index]!, allows: ALLOWS[i]! }));
   const rows = new NumberRows(layout, columns, names.length, faults);
-  const scale = MM_PER[units];
-  const join = new PoseJoin(poses, key, key === "station" ? scale : 1, faults);
-  const { values } = rows;
-  while (rows.next()) {
-    const index = join.find(values[0]!, rows.rows.line);
-    if (rows.lost) sink.lose();
-    else if (index >= 0 && poses !== null) {
-      poses.carry(index, values[1]! * scale, values[2]! * scale);
-      sink.add(poses.x_mm, poses.y_mm, poses.z_mm, index);
-    }
-  }
+  if (poses === null) rows.pass();
+  else
+    carryRows(
+      rows,
+      { poses, scale: MM_PER[units], keyScaled: keyScale(key, units) },
+      sink,
+      new PoseJoin(poses, key, faults),
+    );
   return sink;
 }
 
-/** Finds the pose of each row; rows of one profile stand together, so the last answer mostly serves again. */
-class PoseJoin {
-  #key = Number.NaN;
-  #index = -1;
-  readonly #poses: PoseSet | null;
-  readonly #name: ProfileKey;
-  readonly #scale: number;
-  readonly #faults: FaultList;
-  readonly #missing = new Set<number>();
+interface Carrier {
+  readonly poses: PoseSet;
+  readonly scale: number;
+  readonly keyScaled: number;
+}
 
-  constructor(poses: PoseSet | null, name: ProfileKey, scale: number, faults: FaultList) {
-    this.#poses = poses;
-    this.#name = name;
-    this.#scale = scale;
-    this.#faults = faults;
-  }
-
-  /** Index of the pose, -1 where there is none, which is a fault once for each key. */
-  find(key: number, line: number): number {
-    if (key === this.#key || this.#poses === null) return this.#index;
-    this.#key = key;
-    this.#index = this.#poses.find(key * this.#scale);
-    if (this.#index < 0 && !this.#missing.has(key)) this.#refuse(key, line);
-    return this.#index;
-  }
-
-  #refuse(key: number, line: number): void {
-    this.#missing.add(key);
-    const place = { line, field: this.#name };
-    const station = this.#name === "station" ? { station_mm: key * this.#scale } : {};
-    this.#faults.add("scan-poses-missing", `no pose for ${this.#name} ${key}`, { ...place, ...station });
+function carryRows(
+  rows: NumberRows,
+  { poses, scale, keyScaled }: Carrier,
+  sink: PointSink,
+  join: PoseJoin,
+): void {
+  const { values } = rows;
+  const place = () => ({ line: rows.rows.line });
+  sink.reserve(rowsExpected(rows.rows.bytes, rows.rows.at));
+  while (rows.next()) {
+    const index = join.find(values[0]! * keyScaled, place);
+    if (rows.lost) sink.lose();
+    else if (index >= 0) {
+      poses.carry(index, values[1]! * scale, values[2]! * scale);
+      sink.add(poses.x_mm, poses.y_mm, poses.z_mm, index);
+    }
   }
 }

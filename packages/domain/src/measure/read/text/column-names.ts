@@ -1,5 +1,5 @@
 import type { LengthUnit } from "../../scan-cloud.ts";
-import { type FaultList, quoted } from "../fault-list.ts";
+import { type FaultList, type FaultPlace, quoted } from "../fault-list.ts";
 
 /** A column that a reader needs. */
 export interface WantedColumn {
@@ -33,7 +33,9 @@ export function hasColumn(names: readonly string[], base: string): boolean {
 export interface ColumnHeader {
   readonly names: readonly string[];
   readonly units: LengthUnit;
-  readonly line: number;
+  readonly place: FaultPlace;
+  /** What the format calls a column. */
+  readonly noun: "column" | "property" | "field";
 }
 
 /**
@@ -58,19 +60,19 @@ export function findColumns(
   return faults.faults.length > before ? null : found;
 }
 
-function addMissing({ names, line }: ColumnHeader, base: string, faults: FaultList): void {
-  const what = `column ${base} is missing; the columns are ${names.map(quoted).join(", ")}`;
-  faults.add("file-column-missing", what, { line, field: base });
+function addMissing({ names, noun, place }: ColumnHeader, base: string, faults: FaultList): void {
+  const what = `${noun} ${base} is missing; there are ${names.map(quoted).join(", ") || "none"}`;
+  faults.add("file-column-missing", what, { ...place, field: base });
 }
 
-function addTwice({ line }: ColumnHeader, base: string, faults: FaultList): void {
-  faults.add("file-header-invalid", `column ${base} stands there twice`, { line, field: base });
+function addTwice({ noun, place }: ColumnHeader, base: string, faults: FaultList): void {
+  faults.add("file-header-invalid", `${noun} ${base} stands there twice`, { ...place, field: base });
 }
 
-function checkUnit({ names, units, line }: ColumnHeader, column: number, faults: FaultList): void {
+function checkUnit({ names, units, noun, place }: ColumnHeader, column: number, faults: FaultList): void {
   const name = names[column]!;
   const { unit } = splitName(name);
   if (unit === null || unit === units) return;
-  const what = `column ${quoted(name)} is in ${unit}, but the scan was declared in ${units}`;
-  faults.add("scan-units-contradict", what, { line, field: name });
+  const what = `${noun} ${quoted(name)} is in ${unit}, but the file was declared in "${units}"`;
+  faults.add("scan-units-contradict", what, { ...place, field: name });
 }

@@ -1,8 +1,9 @@
 import { type FaultList, quoted } from "../fault-list.ts";
+import { type CellKind, cellKind } from "../number/cell-kind.ts";
+import { parseNumber } from "../number/parse-number.ts";
 import { utf8Text } from "./bytes.ts";
-import { type CellKind, cellKind } from "./cell-kind.ts";
 import { wasCut } from "./cut-row.ts";
-import { parseNumber } from "./parse-number.ts";
+import { quickRow, type RowShape, rowShape } from "./quick-row.ts";
 import { TextRows } from "./text-rows.ts";
 
 /** A column to be read as numbers. */
@@ -31,12 +32,15 @@ export class NumberRows {
   lost = false;
   /** Rows met so far, readable or not. */
   met = 0;
+  /** Rows to be met at most. */
+  limit = Number.POSITIVE_INFINITY;
   readonly rows: TextRows;
   readonly #mark: number;
   readonly #separator: number;
   readonly #columns: readonly NumberColumn[];
   readonly #width: number | null;
   readonly #faults: FaultList;
+  readonly #shape: RowShape | null;
 
   /** @param width number of cells that every row must have; null where rows may differ */
   constructor(source: RowSource, columns: readonly NumberColumn[], width: number | null, faults: FaultList) {
@@ -47,15 +51,44 @@ export class NumberRows {
     this.#width = width;
     this.#faults = faults;
     this.values = new Float64Array(columns.length);
+    const wanted = columns.map(({ index }) => index);
+    this.#shape = rowShape(source, wanted, width);
   }
 
   /** Goes to the next row that can be read or is lost; false at the end, or when faults are enough. */
   next(): boolean {
-    while (!this.#faults.full && this.rows.next()) {
+    while (!this.#faults.full && this.met < this.limit) {
+      if (this.#quick()) return true;
+      if (!this.rows.next()) return false;
       this.met++;
       if (this.#fits() && this.read()) return true;
     }
     return false;
+  }
+
+  #quick(): boolean {
+    const { rows } = this;
+    const shape = this.#shape;
+    if (shape === null || rows.at >= shape.limit) return false;
+    const next = quickRow(rows.bytes, rows.at, shape, this.values);
+    if (next < 0) return false;
+    rows.at = next;
+    rows.line++;
+    this.met++;
+    this.lost = false;
+    return true;
+  }
+
+  /** Goes through all rows only for their faults. */
+  pass(): void {
+    while (this.next()) this.lost = false;
+  }
+
+  /** Moves the columns to other cells, in the order given to the constructor: for rows of varying shape. */
+  place(cells: readonly number[]): void {
+    this.#columns.forEach((column, i) => {
+      column.index = cells[i]!;
+    });
   }
 
   /** Reads the row that `rows` stands at; false where it has faults. */

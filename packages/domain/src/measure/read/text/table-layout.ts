@@ -1,6 +1,8 @@
-import { BLANK, COMMA, CR, DOT, HASH, LF, MINUS, PLUS, SEMICOLON, SLASH, TAB, utf8Text } from "./bytes.ts";
-import { cellKind } from "./cell-kind.ts";
-import { TextRows } from "./text-rows.ts";
+import { cellKind } from "../number/cell-kind.ts";
+import type { OpenFile } from "../scan-input.ts";
+import { BLANK, CR, DOT, HASH, LF, SLASH, TAB, utf8Text } from "./bytes.ts";
+import { cellsOf, decimalMark, type Line, lineSeparator } from "./separator.ts";
+import { checkCommentUnit } from "./unit-comment.ts";
 
 /** How a text of numbers is laid out. */
 export interface TableLayout {
@@ -20,25 +22,46 @@ export interface TableLayout {
   readonly bodyLine: number;
 }
 
-interface Line {
-  readonly start: number;
-  readonly end: number;
-  readonly line: number;
-  readonly next: number;
-}
-
 interface Names {
   readonly names: readonly string[];
   readonly line: number;
   readonly separator: number;
+  readonly isComment: boolean;
+}
+
+/** What stands above the first row of numbers. */
+interface Head {
+  readonly header: Names | null;
+  readonly declared: number | null;
+  /** The first row of numbers; null where there is none. */
+  readonly first: Line | null;
 }
 
 /**
  * Finds separator, decimal mark, header and count line of a text of numbers.
  * A header is a row with text and without a number; a count line is one whole number alone, before the first row.
- * @param from where the text begins, after a byte order mark
+ * A comment that states another unit than the file was declared in is noted as a fault.
  */
-export function tableLayout(bytes: Uint8Array, from: number): TableLayout {
+export function tableLayout(file: OpenFile): TableLayout {
+  const { bytes } = file;
+  const { header: found, declared, first } = readHead(file);
+  const separator = bodySeparator(bytes, found, first);
+  const header = fitsBody(bytes, found, first, separator) ? found : null;
+  const bodyAt = first?.start ?? bytes.length;
+  return {
+    bytes,
+    separator,
+    mark: decimalMark(bytes, separator, bodyAt),
+    names: header?.names ?? null,
+    namesLine: header?.line ?? 0,
+    declared,
+    bodyAt,
+    bodyLine: first === null ? 0 : first.line - 1,
+  };
+}
+
+function readHead(file: OpenFile): Head {
+  const { bytes, from } = file;
   let header: Names | null = null;
   let declared: number | null = null;
   let line = lineAt(bytes, from, 1);
@@ -46,22 +69,17 @@ export function tableLayout(bytes: Uint8Array, from: number): TableLayout {
     if (isBlank(bytes, line)) continue;
     const comment = commentText(bytes, line);
     if (comment !== null) {
+      checkCommentUnit(utf8Text(bytes, comment.start, comment.end), line.line, file);
       header ??= namesInComment(bytes, comment);
-    } else if (declared === null && isCount(bytes, line)) {
-      declared = Number(utf8Text(bytes, line.start, line.end));
-    } else {
-      const names = headerNames(bytes, line);
-      if (names === null) break;
-      if (header !== null && header.line > 0) break;
-      header = names;
+      continue;
     }
+    const count: number | null = declared === null ? countIn(bytes, line) : null;
+    const names: Names | null = count === null ? headerNames(bytes, line) : null;
+    if (count !== null) declared = count;
+    else if (names !== null && (header === null || header.isComment)) header = names;
+    else break;
   }
-  const separator = bodySeparator(bytes, header, line);
-  const bodyAt = line?.start ?? bytes.length;
-  const bodyLine = line === null ? 0 : line.line - 1;
-  const mark = separator === COMMA ? DOT : decimalMark(new TextRows(bytes, separator, bodyAt, bodyLine));
-  const named = { names: header?.names ?? null, namesLine: Math.abs(header?.line ?? 0) };
-  return { bytes, separator, mark, ...named, declared, bodyAt, bodyLine };
+  return { header, declared, first: line };
 }
 
 function lineAt(bytes: Uint8Array, start: number, line: number): Line | null {
@@ -85,21 +103,21 @@ function commentText(bytes: Uint8Array, line: Line): Line | null {
   return bytes[start] === SLASH && bytes[start + 1] === SLASH ? { ...line, start: start + 2 } : null;
 }
 
-function isCount(bytes: Uint8Array, { start, end }: Line): boolean {
-  return /^\s*\d{1,15}\s*$/.test(utf8Text(bytes, start, Math.min(end, start + 40))) && end - start < 40;
+function countIn(bytes: Uint8Array, { start, end }: Line): number | null {
+  const text = utf8Text(bytes, start, Math.min(end, start + 40)).trim();
+  return end - start < 40 && /^\d{1,15}$/.test(text) ? Number(text) : null;
 }
 
-/** Names in a comment such as `# x y z`; only one that names z, so that prose is never taken for names. */
+/** Names in a comment such as `# x y z`; only one that names z, so that prose is not taken for names. */
 function namesInComment(bytes: Uint8Array, comment: Line): Names | null {
   const found = headerNames(bytes, comment);
-  if (found === null || !found.names.some((name) => /^"?z\b|^"?z_/i.test(name))) return null;
-  // A negative line marks names that a real header may still replace.
-  return { ...found, line: -found.line };
+  if (found === null || !found.names.some((name) => /^"?z([_ ([]|"?$)/i.test(name))) return null;
+  return { ...found, isComment: true };
 }
 
 function headerNames(bytes: Uint8Array, line: Line): Names | null {
   const separator = lineSeparator(bytes, line);
-  const rows = rowOf(bytes, line, separator);
+  const rows = cellsOf(bytes, line, separator);
   let texts = 0;
   const names: string[] = [];
   for (let cell = 0; cell < rows.count && cell < rows.starts.length; cell++) {
@@ -108,66 +126,34 @@ function headerNames(bytes: Uint8Array, line: Line): Names | null {
     if (kind === "text") texts++;
     names.push(utf8Text(rows.bytes, rows.starts[cell]!, rows.ends[cell]!));
   }
-  return texts > 0 ? { names, line: line.line, separator } : null;
+  if (texts === 0) return null;
+  const whole = separator === BLANK ? withUnits(names) : withoutEnd(names);
+  return { names: whole, line: line.line, separator, isComment: false };
 }
 
-function rowOf(bytes: Uint8Array, { start, end, line }: Line, separator: number): TextRows {
-  const rows = new TextRows(bytes.subarray(start, end), separator, 0, line - 1);
-  if (!rows.next()) rows.count = 0;
-  return rows;
+/** Between blanks `x [mm] y [mm]` are two names, not four. */
+function withUnits(words: readonly string[]): string[] {
+  return words
+    .join(" ")
+    .replace(/ +(?=[[(])/g, "")
+    .split(" ");
+}
+
+/** A separator at the end of a row adds no column. */
+function withoutEnd(names: readonly string[]): string[] {
+  const last = names.findLastIndex((name) => name !== "");
+  return names.slice(0, last + 1);
 }
 
 /** Separator of the rows: the header's, unless that has none; then that of the first row. */
 function bodySeparator(bytes: Uint8Array, header: Names | null, first: Line | null): number {
-  if (header !== null && header.line > 0 && header.separator !== BLANK) return header.separator;
+  if (header !== null && !header.isComment && header.separator !== BLANK) return header.separator;
   if (first !== null) return lineSeparator(bytes, first);
   return header?.separator ?? BLANK;
 }
 
-/**
- * Separator of one line: semicolon, tab or comma, whichever comes first in this order, leaves no cell with a blank
- * inside a number and stands between cells; else blanks.
- */
-function lineSeparator(bytes: Uint8Array, line: Line): number {
-  for (const separator of [SEMICOLON, TAB, COMMA]) {
-    const rows = rowOf(bytes, line, separator);
-    if (rows.count > 1 && !splitsBadly(rows)) return separator;
-  }
-  return BLANK;
-}
-
-/** True where a cell begins like a number and has a blank inside. */
-function splitsBadly(rows: TextRows): boolean {
-  const { bytes } = rows;
-  for (let cell = 0; cell < rows.count && cell < rows.starts.length; cell++) {
-    const start = rows.starts[cell]!;
-    if (!beginsNumber(bytes[start])) continue;
-    for (let at = start; at < rows.ends[cell]!; at++) {
-      if (bytes[at] === BLANK || bytes[at] === TAB) return true;
-    }
-  }
-  return false;
-}
-
-function beginsNumber(byte: number | undefined): boolean {
-  return byte !== undefined && ((byte >= 0x30 && byte <= 0x39) || isSignOrMark(byte));
-}
-
-function isSignOrMark(byte: number): boolean {
-  return byte === MINUS || byte === PLUS || byte === DOT || byte === COMMA;
-}
-
-/** The decimal mark of the first number that has one; dot where none has. */
-function decimalMark(rows: TextRows): number {
-  const { bytes } = rows;
-  while (rows.next()) {
-    for (let cell = 0; cell < rows.count && cell < rows.starts.length; cell++) {
-      const start = rows.starts[cell]!;
-      if (!beginsNumber(bytes[start])) continue;
-      for (let at = start; at < rows.ends[cell]!; at++) {
-        if (bytes[at] === DOT || bytes[at] === COMMA) return bytes[at]!;
-      }
-    }
-  }
-  return DOT;
+/** A comment is taken for names only where there is one for each cell of the first row. */
+function fitsBody(bytes: Uint8Array, header: Names | null, first: Line | null, separator: number): boolean {
+  if (header === null || !header.isComment || first === null) return true;
+  return cellsOf(bytes, first, separator).count === header.names.length;
 }

@@ -2,11 +2,12 @@ import type { LengthUnit } from "../../scan-cloud.ts";
 import type { FaultList } from "../fault-list.ts";
 import { MM_PER, PointSink } from "../point-sink.ts";
 import type { OpenFile } from "../scan-input.ts";
-import { findColumns, hasColumn } from "./column-names.ts";
-import { type NumberColumn, NumberRows } from "./number-rows.ts";
+import { findColumns, hasColumn } from "../text/column-names.ts";
+import { type NumberColumn, NumberRows } from "../text/number-rows.ts";
+import { rowsExpected } from "../text/rows-expected.ts";
+import type { TableLayout } from "../text/table-layout.ts";
+import { TextRows } from "../text/text-rows.ts";
 import { StationOrder } from "./station-order.ts";
-import type { TableLayout } from "./table-layout.ts";
-import { TextRows } from "./text-rows.ts";
 
 const COORDINATES = ["x", "y", "z"] as const;
 
@@ -23,6 +24,7 @@ export function readXyz(layout: TableLayout, { units, faults }: OpenFile): Point
   const rows = new NumberRows(layout, columns, names?.length ?? firstWidth(layout), faults);
   const scale = MM_PER[units];
   const { values } = rows;
+  sink.reserve(rowsExpected(layout.bytes, layout.bodyAt));
   while (rows.next()) {
     if (rows.lost) sink.lose();
     else {
@@ -44,7 +46,11 @@ function named(layout: TableLayout, units: LengthUnit, faults: FaultList): Numbe
   const alongX = hasStation && !hasColumn(names, "x") ? ["station", "y", "z"] : COORDINATES;
   const bases = hasStation ? [...alongX, "station"] : alongX;
   const wanted = bases.map((base) => ({ base, isLength: true }));
-  const found = findColumns({ names, units, line: layout.namesLine }, wanted, faults);
+  const found = findColumns(
+    { names, units, place: { line: layout.namesLine }, noun: "column" },
+    wanted,
+    faults,
+  );
   if (found === null) return null;
   return found.map((index, i) => ({ index, name: names[index]!, allows: allowedIn(bases[i]!) }));
 }

@@ -1,4 +1,4 @@
-import { utf8Text } from "./bytes.ts";
+import { utf8Text } from "../text/bytes.ts";
 import { parseNumber } from "./parse-number.ts";
 
 /** What a cell holds: nothing, a number, a word for "no number" (nan, inf), or other text. */
