@@ -59,7 +59,9 @@ export function inspectionEvents(
     const random = new Random(seed, `inspection ${part.ref}`);
     const seams = part.product.seams.slice(0, part.inspected).filter(({ number }) => !(number in part.held));
     const latest = WORKING_HOURS - BEFORE_END_HOURS - seams.length * VISUAL_EACH_HOURS;
-    const first = Math.min(lastPass + random.between(...VISUAL_AFTER_HOURS), latest);
+    const soon = Math.min(lastPass + random.between(...VISUAL_AFTER_HOURS), latest);
+    // A part that is inspected in part is the one under the inspector's eyes when the scenario ends.
+    const first = part.inspected < part.welded ? latest : soon;
     const by = INSPECTORS[i % INSPECTORS.length] ?? INSPECTORS[0];
     return seams.flatMap((seam, place) => {
       const hour = first + place * VISUAL_EACH_HOURS;

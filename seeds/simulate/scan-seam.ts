@@ -29,7 +29,7 @@ export interface SeamOnPart {
 const dot = (one: Vector, other: Vector): number => one[0] * other[0] + one[1] * other[1] + one[2] * other[2];
 
 /** The joint's state with the part's own displacement added to it. */
-function displaced(joint: JointState, frame: Frame, pose: PartPose): JointState {
+export function displaced(joint: JointState, frame: Frame, pose: PartPose): JointState {
   const turn = (pose.turn_deg * Math.PI) / 180;
   const moved: Vector = [
     pose.move_mm[0] - turn * (frame.point[1] - pose.about_mm[1]),
