@@ -14,3 +14,15 @@ export function readShared(path: string): string | undefined {
   console.error(`passed over: ${path} is not here (set BEADROLL_SHARED to the folder that holds it)`);
   return undefined;
 }
+
+/**
+ * Bytes of a file that is kept outside this repository, as `readShared` gives its text.
+ * @param path below the shared folder, e.g. `data/scans/02-butt-v-hilo/cloud.ply`
+ * @returns undefined, with one line on the console, where the folder is absent
+ */
+export function readSharedBytes(path: string): Uint8Array | undefined {
+  const file = `${process.env["BEADROLL_SHARED"] ?? besideTheRepository}/${path}`;
+  if (existsSync(file)) return new Uint8Array(readFileSync(file));
+  console.error(`passed over: ${path} is not here (set BEADROLL_SHARED to the folder that holds it)`);
+  return undefined;
+}
