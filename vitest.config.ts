@@ -5,7 +5,7 @@ export default defineConfig({
     projects: [
       { test: { name: "domain", include: ["packages/domain/src/**/*.test.ts"], testTimeout: 60_000 } },
       { test: { name: "client", include: ["packages/client/src/**/*.test.ts"] } },
-      { test: { name: "web", include: ["apps/web/src/**/*.test.ts"] } },
+      { test: { name: "web", include: ["apps/web/src/**/*.test.ts"], css: true } },
       { test: { name: "cli", include: ["apps/cli/src/**/*.test.ts"], testTimeout: 60_000 } },
       { test: { name: "seeds", include: ["seeds/**/*.test.ts"], testTimeout: 60_000 } },
       {

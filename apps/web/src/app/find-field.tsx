@@ -16,7 +16,7 @@ export function FindField(): ReactElement {
     if (text !== "") void navigate(findPath(text));
   };
   return (
-    <search className="max-lg:order-2 max-lg:w-full max-lg:pb-2">
+    <search className="lg:ml-auto max-lg:mb-3 max-lg:flex-1">
       <form action="/find" onSubmit={find}>
         <input
           ref={input}

@@ -1,5 +1,5 @@
-import type { ReactElement } from "react";
-import { NavLink } from "react-router";
+import { type ReactElement, useId, useState } from "react";
+import { NavLink, useLocation } from "react-router";
 import { navEntries, pageModule } from "./page-modules.ts";
 
 const ENTRIES = navEntries((name) => pageModule(name) !== undefined);
@@ -11,10 +11,10 @@ export function MainNav(): ReactElement | null {
     <nav aria-label="Main" className="self-stretch max-lg:hidden">
       <ul className="flex h-full gap-7">
         {ENTRIES.map((entry) => (
-          <li key={entry.path} className="flex">
+          <li key={entry.path} className="flex items-center">
             <NavLink
               to={entry.path}
-              className="relative flex items-center text-sm font-medium text-ash-on-soot no-underline hover:text-on-soot aria-[current=page]:text-on-soot aria-[current=page]:after:absolute aria-[current=page]:after:inset-x-0 aria-[current=page]:after:bottom-0 aria-[current=page]:after:h-[3px] aria-[current=page]:after:bg-spark"
+              className="relative -mx-2 flex h-9 items-center rounded-sm px-2 text-sm font-semibold text-ash-on-soot no-underline hover:text-on-soot aria-[current=page]:text-on-soot aria-[current=page]:after:absolute aria-[current=page]:after:inset-x-2 aria-[current=page]:after:-bottom-2.5 aria-[current=page]:after:h-[3px] aria-[current=page]:after:bg-spark"
             >
               {entry.nav}
             </NavLink>
@@ -25,23 +25,38 @@ export function MainNav(): ReactElement | null {
   );
 }
 
-/** The same words in one line that scrolls sideways, where the screen is narrow. */
+/** The same words behind a button, where the screen is narrow; they fold away when one is chosen. */
 export function NarrowNav(): ReactElement | null {
+  const id = useId();
+  const { pathname } = useLocation();
+  const [openOn, setOpenOn] = useState<string | null>(null);
+  const isOpen = openOn === pathname;
   if (ENTRIES.length === 0) return null;
   return (
-    <nav aria-label="Main" className="order-3 -mx-4 w-screen overflow-x-auto px-4 lg:hidden">
-      <ul className="flex gap-6">
-        {ENTRIES.map((entry) => (
-          <li key={entry.path}>
-            <NavLink
-              to={entry.path}
-              className="block border-b-[3px] border-transparent py-3 text-sm font-medium whitespace-nowrap text-ash-on-soot no-underline aria-[current=page]:border-spark aria-[current=page]:text-on-soot"
-            >
-              {entry.nav}
-            </NavLink>
-          </li>
-        ))}
-      </ul>
-    </nav>
+    <>
+      <button
+        type="button"
+        aria-expanded={isOpen}
+        aria-controls={id}
+        onClick={() => setOpenOn(isOpen ? null : pathname)}
+        className="-mr-2 ml-auto flex h-11 items-center rounded-sm px-2 text-sm font-semibold text-on-soot lg:hidden"
+      >
+        {isOpen ? "Close menu" : "Menu"}
+      </button>
+      <nav id={id} aria-label="Main" hidden={!isOpen} className="w-full pb-4 lg:hidden">
+        <ul className="grid grid-cols-2 gap-x-6">
+          {ENTRIES.map((entry) => (
+            <li key={entry.path}>
+              <NavLink
+                to={entry.path}
+                className="flex min-h-12 items-center border-t border-field-on-soot font-medium text-on-soot no-underline aria-[current=page]:border-t-spark aria-[current=page]:text-spark"
+              >
+                {entry.nav}
+              </NavLink>
+            </li>
+          ))}
+        </ul>
+      </nav>
+    </>
   );
 }

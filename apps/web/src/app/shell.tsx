@@ -26,17 +26,14 @@ export function Shell(props: { person: ShellPerson | null; children: ReactNode }
       >
         Skip to the page
       </a>
-      <header className="screen-only on-soot sticky top-0 z-30">
-        <div className="mx-auto flex min-h-14 max-w-[100rem] flex-wrap items-center gap-x-7 px-4 sm:px-6">
+      <header className="screen-only on-soot top-0 z-30 max-lg:relative lg:sticky">
+        <div className="mx-auto flex min-h-14 max-w-[100rem] flex-wrap items-center gap-x-7 px-4 max-lg:gap-x-3 sm:px-6">
           <Wordmark />
           <MainNav />
-          <div className="ml-auto flex items-center gap-4 max-lg:contents">
-            <FindField />
-            <div className="max-lg:order-1 max-lg:ml-auto">
-              <UserMenu person={props.person} />
-            </div>
-          </div>
           <NarrowNav />
+          <div className="h-0 basis-full lg:hidden" />
+          <FindField />
+          <UserMenu person={props.person} />
         </div>
         <NavigationProgress />
       </header>

@@ -15,7 +15,7 @@ export function UserMenu(props: { person: ShellPerson | null }): ReactElement {
       <button
         type="button"
         popoverTarget={id}
-        className="flex h-9 items-center gap-2 rounded-sm px-2 text-sm font-medium whitespace-nowrap text-on-soot hover:bg-field-on-soot max-lg:h-11"
+        className="-mr-2 flex h-9 items-center gap-2 lg:-ml-3 rounded-sm px-2 text-sm font-semibold whitespace-nowrap text-on-soot hover:bg-field-on-soot max-lg:mb-3 max-lg:h-11"
       >
         {props.person?.name ?? "Screen"}
         <span
@@ -26,7 +26,7 @@ export function UserMenu(props: { person: ShellPerson | null }): ReactElement {
       <div
         id={id}
         popover="auto"
-        className="fixed inset-auto top-15 right-4 m-0 w-72 rounded-sm border border-rule bg-sheet p-0 text-ink shadow-float [--focus:var(--link)] sm:right-6"
+        className="fixed inset-auto top-15 max-lg:top-29 right-4 m-0 w-72 rounded-sm border border-rule bg-sheet p-0 text-ink shadow-float [--focus:var(--link)] sm:right-6"
       >
         {props.person === null ? null : <Identity person={props.person} />}
         <div className="grid gap-4 px-4 py-4">

@@ -1,4 +1,5 @@
-import { type LengthUnits, toMm } from "../units/length-units.ts";
+import { parseLengthField } from "@beadroll/domain/units/length-field";
+import type { LengthUnits } from "../units/length-units.ts";
 
 /** A number as read from what somebody typed; refused with words that help. */
 export type NumberReading =
@@ -6,7 +7,6 @@ export type NumberReading =
   | { readonly ok: false; readonly words: string };
 
 const PLAIN = /^[+-]?(\d+\.?\d*|\.\d+)$/;
-const FRACTION = /^([+-]?)(?:(\d+)[ -])?(\d+)\/(\d+)$/;
 
 const refuse = (words: string): NumberReading => ({ ok: false, words });
 
@@ -30,22 +30,12 @@ export function readNumber(text: string): NumberReading {
 
 /**
  * A length in mm from what somebody typed, in the units of the screen unless the text names its own:
- * `12,5`, `12.5 mm`, `0.5 in`, `1/2"`, `1 3/8 in`.
+ * `12,5`, `12.5 mm`, `0.5 in`, `1/2"`, `1 3/8 in`. Nothing typed is null.
  */
 export function readLength(text: string, units: LengthUnits): NumberReading {
-  const [, figure = "", suffix = ""] = /^(.*?)\s*(mm|in|inch|inches|"|″)?$/i.exec(text.trim()) ?? [];
-  const typedUnits: LengthUnits = suffix === "" ? units : suffix.toLowerCase() === "mm" ? "mm" : "in";
-  const fraction = typedUnits === "in" ? readFraction(figure) : null;
-  const reading: NumberReading = fraction === null ? readNumber(figure) : { ok: true, value: fraction };
-  if (!reading.ok || reading.value === null) return reading;
-  return { ok: true, value: toMm(reading.value, typedUnits) };
-}
-
-function readFraction(text: string): number | null {
-  const match = FRACTION.exec(text.trim());
-  if (match === null || Number(match[4]) === 0) return null;
-  const size = Number(match[2] ?? 0) + Number(match[3]) / Number(match[4]);
-  return match[1] === "-" ? -size : size;
+  if (text.trim() === "") return { ok: true, value: null };
+  const read = parseLengthField(text, units);
+  return read.ok ? read : refuse(read.faults[0]?.detail ?? "This is no length.");
 }
 
 /** A number as it stands in a field: without needless zeros, decimals by point. */

@@ -21,6 +21,13 @@ export function limitWords(rule: FieldRule, scale: FieldUnits): string | undefin
   return `${start} to ${exactly(high)}`;
 }
 
+const TYPE_WORDS: Readonly<Record<string, string>> = {
+  number: "Give a number.",
+  int: "Give a whole number.",
+  string: "Give this as text.",
+  boolean: "Say yes or no.",
+};
+
 /** A fault that zod found in a field, in plain words that say what to do. */
 export function issueWords(issue: z.core.$ZodIssue, isEmpty: boolean, scale: FieldUnits): string {
   if (isEmpty && issue.code !== "custom") return "Fill this in.";
@@ -30,9 +37,7 @@ export function issueWords(issue: z.core.$ZodIssue, isEmpty: boolean, scale: Fie
     case "too_big":
       return `${issue.inclusive === false ? "Less than" : "At most"} ${sizeWords(issue.origin, Number(issue.maximum), scale)}.`;
     case "invalid_type":
-      return issue.expected === "number" || issue.expected === "int"
-        ? "Give a number."
-        : "This is not understood here.";
+      return TYPE_WORDS[issue.expected] ?? "This is not understood here.";
     case "invalid_value":
       return "Choose one from the list.";
     case "invalid_format":

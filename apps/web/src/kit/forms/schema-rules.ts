@@ -52,7 +52,7 @@ function ruleOf(node: JsonNode, required: boolean, nullable: boolean): FieldRule
   return {
     required,
     nullable,
-    type: textOf(node["type"]),
+    type: typeOf(node["type"]),
     minimum: boundOf(node["minimum"]),
     maximum: boundOf(node["maximum"]),
     above: boundOf(node["exclusiveMinimum"]),
@@ -86,12 +86,19 @@ function plainNode(node: JsonNode): JsonNode {
 }
 
 function isNullable(node: JsonNode): boolean {
+  const types = node["type"];
+  if (Array.isArray(types)) return types.includes("null");
   const choices = node["anyOf"];
   return Array.isArray(choices) && choices.some((choice) => nodeOf(choice)["type"] === "null");
 }
 
 function nodeOf(value: unknown): JsonNode {
   return typeof value === "object" && value !== null && !Array.isArray(value) ? { ...value } : {};
+}
+
+/** A type, or of "a type or null" the type. */
+function typeOf(value: unknown): string | undefined {
+  return Array.isArray(value) ? textOf(value.find((type) => type !== "null")) : textOf(value);
 }
 
 function textOf(value: unknown): string | undefined {

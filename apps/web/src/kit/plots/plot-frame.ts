@@ -37,7 +37,7 @@ export function roundTicks(low: number, high: number, count: number): number[] {
   if (!(high > low) || !(count >= 1)) return [];
   const rough = (high - low) / count;
   const power = 10 ** Math.floor(Math.log10(rough));
-  const step = power * (STEPS.find((candidate) => candidate * power >= rough * (1 - 1e-9)) ?? 10);
+  const step = power * (STEPS.find((candidate) => candidate * power >= rough * 0.8) ?? 10);
   const first = Math.ceil(low / step - 1e-9);
   const last = Math.floor(high / step + 1e-9);
   const decimals = tickDecimals(step);
@@ -46,12 +46,12 @@ export function roundTicks(low: number, high: number, count: number): number[] {
   );
 }
 
-/** How many decimals a step needs to be written exactly, six at most. */
+/** How many decimals a step needs to be written exactly, twelve at most. */
 export function tickDecimals(step: number): number {
-  for (let decimals = 0; decimals < 6; decimals++) {
+  for (let decimals = 0; decimals < 12; decimals++) {
     if (Math.abs(step - Number(step.toFixed(decimals))) < step * 1e-6) return decimals;
   }
-  return 6;
+  return 12;
 }
 
 /** Lowest and highest of several lists, nulls left out; null where nothing is left. */

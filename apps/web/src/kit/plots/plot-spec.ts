@@ -1,4 +1,10 @@
-import { formatFigure, formatSigned, fromMm, type LengthUnits } from "../units/length-units.ts";
+import {
+  formatFigure,
+  formatSigned,
+  fromMm,
+  type LengthUnits,
+  MORE_DECIMALS_FOR_INCHES,
+} from "../units/length-units.ts";
 import { extentOf, padded } from "./plot-frame.ts";
 import type { Values } from "./plot-paths.ts";
 
@@ -27,7 +33,7 @@ export interface PlotSpec {
   /** Smallest and largest around each value, for a thinned log. */
   readonly envelope?: { readonly min: Values; readonly max: Values };
   readonly bands?: readonly PlotBand[];
-  /** Decimals in the table and at the cursor; an inch gets two more. */
+  /** Decimals in the table and at the cursor; an inch gets one more. */
   readonly decimals?: number;
   /** Deviations bear their sign. */
   readonly signed?: boolean;
@@ -63,7 +69,7 @@ export function inUnits(spec: PlotSpec, units: LengthUnits): PlotSpec {
   return {
     ...spec,
     unit: units,
-    decimals: (spec.decimals ?? 2) + 2,
+    decimals: (spec.decimals ?? 2) + MORE_DECIMALS_FOR_INCHES,
     values: spec.values.map(turn),
     ...(spec.expanded_u && { expanded_u: spec.expanded_u.map(turn) }),
     ...(spec.envelope && {

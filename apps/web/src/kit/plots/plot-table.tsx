@@ -21,7 +21,7 @@ export function PlotTable(props: {
     id: "station",
     head: `Station, ${props.units}`,
     value: (row) => fromMm(row.station_mm, props.units),
-    cell: (row) => formatFigure(fromMm(row.station_mm, props.units), props.units === "mm" ? 1 : 3),
+    cell: (row) => formatFigure(fromMm(row.station_mm, props.units), props.units === "mm" ? 1 : 2),
     align: "right",
     figures: true,
     field: `station_${props.units}`,

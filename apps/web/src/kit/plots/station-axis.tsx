@@ -1,9 +1,9 @@
 import type { KeyboardEvent, ReactElement } from "react";
-import { nearestStation } from "../strip/bead-strip-drawing.ts";
-import { formatFigure, fromMm } from "../units/length-units.ts";
+import { formatFigure, formatLength, fromMm } from "../units/length-units.ts";
 import { useLengthUnits } from "../units/units-context.tsx";
 import { linearScale, pixelOf, roundTicks, tickDecimals } from "./plot-frame.ts";
 import type { PlotLayout } from "./plot-layout.ts";
+import { stationAfterKey } from "./station-keys.ts";
 
 interface StationAxisProps {
   label: string;
@@ -63,6 +63,11 @@ export function StationAxis(props: StationAxisProps): ReactElement {
           {`station, ${units}`}
         </text>
         {cursor_mm === null ? null : (
+          <text x={range[0]} y="33" className="fill-ash font-mono text-xs md:hidden">
+            {`at ${formatLength(cursor_mm, units, 1)}`}
+          </text>
+        )}
+        {cursor_mm === null ? null : (
           <path
             transform={`translate(${pixelOf(scale, fromMm(cursor_mm, units))} 0)`}
             d="M0 1 5 9v5h-10v-5z"
@@ -72,30 +77,4 @@ export function StationAxis(props: StationAxisProps): ReactElement {
       </svg>
     </div>
   );
-}
-
-/** The station that a key leads to; null if the key means nothing here. */
-export function stationAfterKey(
-  key: string,
-  stations_mm: readonly number[],
-  cursor_mm: number | null,
-): number | null {
-  const last = stations_mm.length - 1;
-  const at = nearestStation(
-    stations_mm.map((station_mm) => ({ station_mm })),
-    cursor_mm ?? 0,
-  );
-  const steps: Record<string, number> = {
-    ArrowRight: at + 1,
-    ArrowUp: at + 1,
-    ArrowLeft: at - 1,
-    ArrowDown: at - 1,
-    PageUp: at + 10,
-    PageDown: at - 10,
-    Home: 0,
-    End: last,
-  };
-  const next = steps[key];
-  if (next === undefined || last < 0) return null;
-  return stations_mm[Math.min(Math.max(next, 0), last)] ?? null;
 }

@@ -1,12 +1,15 @@
+import { temperColour } from "@beadroll/domain/quality/temper";
 import { memo, type ReactElement, useEffect, useRef } from "react";
 import { ripplePath, type StripCommand } from "./bead-strip-drawing.ts";
-import { temperColour } from "./temper.ts";
 
 interface PictureProps {
   commands: readonly StripCommand[];
   width: number;
   height: number;
 }
+
+/** Half of it lies under the ripples, half outside them. */
+const OUTLINE_PX = 1.7;
 
 /** All ripples as one path: drawn first and wider, it stays as the bead's outline, 3:1 against the ground. */
 function beadOutline(commands: readonly StripCommand[]): string {
@@ -17,7 +20,7 @@ function beadOutline(commands: readonly StripCommand[]): string {
 export const StripSvg = memo(function StripSvg({ commands, width, height }: PictureProps): ReactElement {
   return (
     <svg aria-hidden="true" width={width} height={height} className="absolute top-0 left-0 overflow-visible">
-      <path d={beadOutline(commands)} fill="none" stroke="var(--bead-outline)" strokeWidth="2" />
+      <path d={beadOutline(commands)} fill="none" stroke="var(--bead-outline)" strokeWidth={OUTLINE_PX} />
       {commands.map((command) =>
         command.kind === "gap" ? (
           <rect
@@ -37,7 +40,7 @@ export const StripSvg = memo(function StripSvg({ commands, width, height }: Pict
             d={ripplePath(command)}
             fill={temperColour(command.share)}
             stroke="var(--ripple-line)"
-            strokeWidth={command.partial ? 1.2 : 0.9}
+            strokeWidth={command.partial ? 1.2 : 0.7}
             strokeDasharray={command.partial ? "2 2" : undefined}
           />
         ),
@@ -86,7 +89,7 @@ function paintStrip(canvas: HTMLCanvasElement, { commands, width, height }: Pict
   const style = getComputedStyle(canvas);
   context.scale(scale, scale);
   context.strokeStyle = style.color;
-  context.lineWidth = 2;
+  context.lineWidth = OUTLINE_PX;
   context.stroke(new Path2D(beadOutline(commands)));
   for (const command of commands) {
     if (command.kind === "gap") {
@@ -100,7 +103,7 @@ function paintStrip(canvas: HTMLCanvasElement, { commands, width, height }: Pict
     context.fillStyle = temperColour(command.share);
     context.fill(path);
     context.strokeStyle = style.outlineColor;
-    context.lineWidth = command.partial ? 1.2 : 0.9;
+    context.lineWidth = command.partial ? 1.2 : 0.7;
     context.setLineDash(command.partial ? [2, 2] : []);
     context.stroke(path);
   }

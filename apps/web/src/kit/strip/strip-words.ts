@@ -1,4 +1,4 @@
-import { formatLength, formatSigned, fromMm, type LengthUnits } from "../units/length-units.ts";
+import { formatDeviation, formatLength, formatSigned, type LengthUnits } from "../units/length-units.ts";
 import { isDrawable, type StripStation, signOf } from "./strip-groups.ts";
 
 /** What the strip's deviations are in. */
@@ -47,7 +47,7 @@ function sideText(station: StripStation): string {
 
 function deviationText(deviation: number, unit: StripUnit, units: LengthUnits): string {
   if (unit === "°") return `${formatSigned(deviation, 1)}°`;
-  return `${formatSigned(fromMm(deviation, units), units === "mm" ? 2 : 4)} ${units}`;
+  return formatDeviation(deviation, units);
 }
 
 function shareText(share: number): string {

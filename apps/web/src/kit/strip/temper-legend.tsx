@@ -1,5 +1,5 @@
+import { temperColour } from "@beadroll/domain/quality/temper";
 import type { ReactElement } from "react";
-import { temperColour } from "./temper.ts";
 
 const STEPS = 40;
 /** The legend's last part stands for all that is beyond the limit. */

@@ -18,7 +18,7 @@ export function TableHead<Row>(props: TableHeadProps<Row>): ReactElement {
             scope="col"
             aria-sort={ariaSort(column.id, props.sort)}
             style={column.width === undefined ? undefined : { width: column.width, minWidth: column.width }}
-            className={`table-head sticky top-0 z-10 bg-sheet px-2 pt-1 pb-1.5 font-semibold whitespace-nowrap shadow-[inset_0_-1px_0_var(--ink)] ${columnClass(column)}`}
+            className={`table-head sticky top-0 z-10 bg-sheet px-2 pt-1 pb-1.5 align-bottom font-semibold sm:whitespace-nowrap shadow-[inset_0_-1px_0_var(--ink)] ${columnClass(column)}`}
           >
             {column.value === undefined ? (
               column.head

@@ -1,20 +1,14 @@
+import * as domain from "@beadroll/domain/units/length";
+
 /** How this screen shows lengths. Everything stored and sent is in mm. */
-export type LengthUnits = "mm" | "in";
+export type LengthUnits = domain.LengthUnit;
 
-/** Millimetres in an inch, exact (ISO 80000-3:2019, 3-1.1). */
-export const MM_PER_INCH = 25.4;
-
-/** What is added to a number of decimals so that an inch shows as finely as a millimetre does. */
-const MORE_DECIMALS_FOR_INCHES = 2;
+/** What is added to a number of decimals so that an inch shows about as finely as a millimetre does. */
+export const MORE_DECIMALS_FOR_INCHES = 1;
 
 /** A length in the units shown. */
 export function fromMm(length_mm: number, units: LengthUnits): number {
-  return units === "mm" ? length_mm : length_mm / MM_PER_INCH;
-}
-
-/** A length typed in the units shown, in mm. */
-export function toMm(length: number, units: LengthUnits): number {
-  return units === "mm" ? length : length * MM_PER_INCH;
+  return units === "mm" ? length_mm : domain.inchesFromMm(length_mm);
 }
 
 /** A figure with a fixed number of decimals, a true minus sign, and no "-0.00". */
@@ -30,8 +24,16 @@ export function formatSigned(value: number, decimals: number): string {
   return Number(value.toFixed(decimals)) > 0 ? `+${text}` : text;
 }
 
-/** A length with its unit: `formatLength(3.41, "mm")` is "3.41 mm", in inches "0.1343 in". */
+/** A length with its unit: `formatLength(3.41, "mm")` is "3.41 mm", in inches "0.134 in". */
 export function formatLength(length_mm: number, units: LengthUnits, decimals_mm = 2): string {
-  const decimals = units === "mm" ? decimals_mm : decimals_mm + MORE_DECIMALS_FOR_INCHES;
-  return `${formatFigure(fromMm(length_mm, units), decimals)} ${units}`;
+  return domain.formatLength(length_mm, { unit: units, digits: digitsFor(units, decimals_mm) });
+}
+
+/** A deviation with its sign and unit: "+0.37 mm". */
+export function formatDeviation(length_mm: number, units: LengthUnits, decimals_mm = 2): string {
+  return domain.formatLength(length_mm, { unit: units, digits: digitsFor(units, decimals_mm), signed: true });
+}
+
+function digitsFor(units: LengthUnits, decimals_mm: number): number {
+  return units === "mm" ? decimals_mm : decimals_mm + MORE_DECIMALS_FOR_INCHES;
 }
