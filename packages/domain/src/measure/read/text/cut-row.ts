@@ -1,9 +1,12 @@
 import { CR, LF } from "./bytes.ts";
 import type { TextRows } from "./text-rows.ts";
 
-/** Rows before the last that are compared with it, and how many are needed at least to say anything. */
-const ROWS_COMPARED = 64;
-const ROWS_NEEDED = 8;
+/**
+ * Rows before the last that are compared with it, and how many are needed at least to say anything: programs that
+ * leave out zeros at the end give one number of decimals for so many rows hardly ever.
+ */
+const ROWS_COMPARED = 256;
+const ROWS_NEEDED = 20;
 
 /**
  * Whether the last row of a text without a last line end was cut inside its last number: all rows before it end

@@ -1,5 +1,5 @@
 import { EXACT_LIMIT, MAX_POWER, POWERS, parseNumber } from "../number/parse-number.ts";
-import { BLANK, CR, LF, MINUS, TAB, ZERO } from "./bytes.ts";
+import { BLANK, CR, HASH, LF, MINUS, SLASH, TAB, ZERO } from "./bytes.ts";
 
 /** Widest row that is read the quick way. */
 const MAX_WIDTH = 64;
@@ -46,6 +46,8 @@ export function quickRow(bytes: Uint8Array, from: number, shape: RowShape, value
     let byte = bytes[at]!;
     if (separator === BLANK) while (byte === BLANK || byte === TAB) byte = bytes[++at]!;
     if (slot < 0) {
+      // Nobody reads this cell, so nothing else would notice that the row is a comment.
+      if (cell === 0 && (byte === HASH || byte === SLASH || byte === BLANK || byte === TAB)) return -1;
       while (byte !== separator && byte !== TAB && byte !== LF && byte !== CR) byte = bytes[++at]!;
       if (byte === TAB && separator !== TAB && separator !== BLANK) return -1;
     } else {

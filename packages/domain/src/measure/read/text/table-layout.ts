@@ -1,7 +1,8 @@
-import { cellKind } from "../number/cell-kind.ts";
+import { type CellKind, cellKind } from "../number/cell-kind.ts";
 import type { OpenFile } from "../scan-input.ts";
-import { BLANK, CR, DOT, HASH, LF, SLASH, TAB, utf8Text } from "./bytes.ts";
+import { BLANK, COMMA, CR, DOT, HASH, LF, SLASH, TAB, utf8Text } from "./bytes.ts";
 import { cellsOf, decimalMark, type Line, lineSeparator } from "./separator.ts";
+import type { TextRows } from "./text-rows.ts";
 import { checkCommentUnit } from "./unit-comment.ts";
 
 /** How a text of numbers is laid out. */
@@ -121,7 +122,7 @@ function headerNames(bytes: Uint8Array, line: Line): Names | null {
   let texts = 0;
   const names: string[] = [];
   for (let cell = 0; cell < rows.count && cell < rows.starts.length; cell++) {
-    const kind = cellKind(rows.bytes, rows.starts[cell]!, rows.ends[cell]!, DOT);
+    const kind = kindOfCell(rows, cell, separator);
     if (kind === "number") return null;
     if (kind === "text") texts++;
     names.push(utf8Text(rows.bytes, rows.starts[cell]!, rows.ends[cell]!));
@@ -129,6 +130,12 @@ function headerNames(bytes: Uint8Array, line: Line): Names | null {
   if (texts === 0) return null;
   const whole = separator === BLANK ? withUnits(names) : withoutEnd(names);
   return { names: whole, line: line.line, separator, isComment: false };
+}
+
+/** Kind of a cell while the decimal mark is not known yet. */
+function kindOfCell({ bytes, starts, ends }: TextRows, cell: number, separator: number): CellKind {
+  const kind = cellKind(bytes, starts[cell]!, ends[cell]!, DOT);
+  return kind === "text" && separator !== COMMA ? cellKind(bytes, starts[cell]!, ends[cell]!, COMMA) : kind;
 }
 
 /** Between blanks `x [mm] y [mm]` are two names, not four. */
