@@ -64,7 +64,7 @@ export const listMounts = contract({
   access: "records:read",
   query: z.strictObject({
     ...PageQuery,
-    cell_tag: z.string().optional().meta({ description: "Only this cell", example: "C-5N8R3W6YD" }),
+    cell_tag: z.string().optional().meta({ description: "Only this cell", example: "C-8K3F7Q2N6" }),
   }),
   answer: { status: 200, description: "A page of mounts", schema: pageOf(Mount) },
   problems: ["parameter-unknown", "tag-invalid", "not-found"],

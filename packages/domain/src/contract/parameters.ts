@@ -2,7 +2,7 @@ import { z } from "zod";
 
 /** Path parameter: a tag as read from a label; case and O/0, I/1 confusions are forgiven. */
 export const TagParams = z.object({
-  tag: z.string().min(3).max(200).meta({ description: "Tag", example: "S-7K3F9Q2MX" }),
+  tag: z.string().min(3).max(200).meta({ description: "Tag", example: "S-8K3F7Q2NS" }),
 });
 
 /** Path parameter: an identifier. */

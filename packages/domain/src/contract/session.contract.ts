@@ -27,7 +27,7 @@ export const refreshSession = contract({
   group,
   access: "open",
   answer: { status: 200, description: "Still signed in", schema: Session },
-  problems: ["not-signed-in"],
+  problems: ["not-signed-in", "not-allowed"],
 });
 
 export const signOut = contract({
@@ -38,7 +38,7 @@ export const signOut = contract({
   group,
   access: "open",
   answer: { status: 204, description: "Signed out" },
-  problems: [],
+  problems: ["not-allowed"],
 });
 
 export const getMe = contract({

@@ -7,7 +7,7 @@ export const SLOTS = ["wire", "gas", "flux"] as const;
 export const Cell = z
   .object({
     id: id("Cell"),
-    tag: z.string().meta({ description: "Tag", example: "C-5N8R3W6YD" }),
+    tag: z.string().meta({ description: "Tag", example: "C-8K3F7Q2N6" }),
     name: line("Name", "Cell 2"),
     robot: line("Robot", "Six-axis, 2.0 m, serial 7714"),
     power_source: line("Power source", "500 A pulsed, serial 0093"),
@@ -32,7 +32,7 @@ export const Mount = z
     cell_id: id("Cell"),
     cell_name: z.string().meta({ description: "Cell's name" }),
     slot: z.enum(SLOTS).meta({ description: "Where on the cell" }),
-    lot_tag: z.string().meta({ description: "Tag of the lot", example: "L-8H2K5T9QM" }),
+    lot_tag: z.string().meta({ description: "Tag of the lot", example: "L-8K3F7Q2NN" }),
     lot_number: z.string().meta({ description: "Number of the lot", example: "W-3391" }),
     from_at: instant("Mounted"),
     to_at: instant("Taken off").nullable(),
@@ -45,7 +45,7 @@ export const MountCreate = z
   .strictObject({
     cell_tag: z.string().optional().meta({ description: "Cell; a machine's key may leave it out" }),
     slot: z.enum(SLOTS).meta({ description: "Where on the cell", example: "wire" }),
-    lot_tag: z.string().meta({ description: "Tag of the lot", example: "L-8H2K5T9QM" }),
+    lot_tag: z.string().meta({ description: "Tag of the lot", example: "L-8K3F7Q2NN" }),
     at: instant("When it was mounted; now if absent").optional(),
   })
   .meta({ id: "MountCreate" });

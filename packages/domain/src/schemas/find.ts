@@ -26,6 +26,6 @@ export type FindAnswer = z.infer<typeof FindAnswer>;
 export const TagAnswer = Found.extend({
   page: z
     .string()
-    .meta({ description: "Path of its page in the web application", example: "/seams/S-7K3F9Q2MX" }),
+    .meta({ description: "Path of its page in the web application", example: "/seams/S-8K3F7Q2NS" }),
 }).meta({ id: "TagAnswer" });
 export type TagAnswer = z.infer<typeof TagAnswer>;

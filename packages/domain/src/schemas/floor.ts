@@ -11,7 +11,11 @@ export const FloorCell = z
     last_event_at: instant("Last scan or pass it sent").nullable(),
     latest: z.array(SeamRow).meta({ description: "The seams it worked on last, 6 at most" }),
     today: z
-      .object({ scans: z.int(), passes: z.int(), holds: z.int() })
+      .object({
+        scans: z.int().meta({ description: "Scans recorded", example: 18 }),
+        passes: z.int().meta({ description: "Passes welded", example: 16 }),
+        holds: z.int().meta({ description: "Scans with the verdict hold", example: 1 }),
+      })
       .meta({ description: "Scans, passes and holds since midnight UTC" }),
   })
   .meta({ id: "FloorCell" });

@@ -10,7 +10,7 @@ export type InspectionResult = (typeof INSPECTION_RESULTS)[number];
 export const Inspection = z
   .object({
     id: id("Inspection"),
-    seam_tag: z.string().meta({ description: "Tag of the seam", example: "S-7K3F9Q2MX" }),
+    seam_tag: z.string().meta({ description: "Tag of the seam", example: "S-8K3F7Q2NS" }),
     attempt: z.int().meta({ description: "Attempt examined", example: 1 }),
     method: z.enum(INSPECTION_METHODS).meta({ description: "Method, abbreviated as in ISO 17635" }),
     result: z.enum(INSPECTION_RESULTS).meta({ description: "Against the seam's quality level" }),

@@ -20,7 +20,7 @@ const lotFields = {
 export const Lot = z
   .object({
     id: id("Lot"),
-    tag: z.string().meta({ description: "Tag", example: "L-8H2K5T9QM" }),
+    tag: z.string().meta({ description: "Tag", example: "L-8K3F7Q2NN" }),
     ...lotFields,
     state: z.enum(LOT_STATES).meta({ description: "Whether it may be used" }),
     note: note("Remarks", "Edge damage on sheet 2"),

@@ -24,7 +24,7 @@ export const SeamTally = z
 export const Part = z
   .object({
     id: id("Part"),
-    tag: z.string().meta({ description: "Tag", example: "P-7K3F9Q2MX" }),
+    tag: z.string().meta({ description: "Tag", example: "P-8K3F7Q2NA" }),
     ...partFields,
     name: z.string().meta({ description: "Title of the drawing and serial", example: "Skid frame 0418" }),
     drawing_id: id("Drawing"),
@@ -54,7 +54,7 @@ export const Piece = z
   .object({
     id: id("Piece"),
     position: line("What it is in the part", "Web plate", 60),
-    lot_tag: z.string().meta({ description: "Tag of its lot", example: "L-8H2K5T9QM" }),
+    lot_tag: z.string().meta({ description: "Tag of its lot", example: "L-8K3F7Q2NN" }),
     lot_number: z.string().meta({ description: "Heat or lot number", example: "H48812" }),
     lot_kind: z.string().meta({ description: "Kind of the lot", example: "plate" }),
     grade: z.string().meta({ description: "Grade", example: "S355J2" }),

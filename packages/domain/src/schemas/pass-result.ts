@@ -18,11 +18,16 @@ export const PASS_QUANTITIES = [
 export type PassQuantity = (typeof PASS_QUANTITIES)[number];
 
 /** A procedure's range for one quantity, both ends allowed; in the quantity's own unit. */
-export const QuantityRange = z.object({ min: z.number(), max: z.number() }).meta({
-  id: "QuantityRange",
-  description: "Allowed range, both ends included",
-  example: { min: 220, max: 280 },
-});
+export const QuantityRange = z
+  .object({
+    min: z.number().meta({ description: "Lowest allowed", example: 220 }),
+    max: z.number().meta({ description: "Highest allowed", example: 280 }),
+  })
+  .meta({
+    id: "QuantityRange",
+    description: "Allowed range, both ends included",
+    example: { min: 220, max: 280 },
+  });
 export type QuantityRange = z.infer<typeof QuantityRange>;
 
 /** One quantity over the time the arc burned, each moment weighing the same however it was sampled. */

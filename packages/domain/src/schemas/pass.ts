@@ -13,7 +13,7 @@ export const PassCreate = z
     operator_tag: z
       .string()
       .optional()
-      .meta({ description: "Badge of the operator", example: "W-4T7M2Q9XH" }),
+      .meta({ description: "Badge of the operator", example: "W-8K3F7Q2NF" }),
     program: line("Robot program and version", "SKID-S4 v12", 80).optional(),
     part_tag: z.string().optional().meta({
       description: "The part the cell believes it welds; refused if the seam is on another",

@@ -5,7 +5,7 @@ import { day, id, instant, line, version } from "./quantities.ts";
 export const Person = z
   .object({
     id: id("Person"),
-    tag: z.string().meta({ description: "Badge", example: "W-4T7M2Q9XH" }),
+    tag: z.string().meta({ description: "Badge", example: "W-8K3F7Q2NF" }),
     name: line("Name", "Ilka Varga"),
     job: line("Job", "Welding operator"),
     active: z.boolean().meta({ description: "Works here now" }),

@@ -3,7 +3,10 @@ import { id, instant, line, version } from "./quantities.ts";
 
 const range = (what: string, unit: string, example: { min: number; max: number }) =>
   z
-    .strictObject({ min: z.number(), max: z.number() })
+    .strictObject({
+      min: z.number().meta({ description: `Lowest allowed, ${unit}`, example: example.min }),
+      max: z.number().meta({ description: `Highest allowed, ${unit}`, example: example.max }),
+    })
     .refine((r) => r.min <= r.max, { message: "min must not be above max" })
     .nullable()
     .meta({ description: `${what}, ${unit}; null when the procedure does not limit it`, example });

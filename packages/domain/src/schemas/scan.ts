@@ -16,7 +16,7 @@ export const ScanCreate = z
     taken_at: instant("When the cell took it, by its clock").optional(),
     part_tag: z.string().optional().meta({
       description: "The part the cell believes it scans; refused if the seam is on another",
-      example: "P-7K3F9Q2MX",
+      example: "P-8K3F7Q2NA",
     }),
     cell_tag: z.string().optional().meta({ description: "The cell; a machine's key may leave it out" }),
   })

@@ -39,7 +39,7 @@ export type Strip = z.infer<typeof Strip>;
 export const SeamRow = z
   .object({
     id: id("Seam"),
-    tag: z.string().meta({ description: "Tag", example: "S-7K3F9Q2MX" }),
+    tag: z.string().meta({ description: "Tag", example: "S-8K3F7Q2NS" }),
     number: line("Seam number on the drawing", "S4"),
     attempt: z.int().meta({ description: "1, or 2 and more after repairs", example: 1 }),
     joint_type: JointType,
@@ -53,7 +53,7 @@ export const SeamRow = z
       .nullable()
       .meta({ description: "Mean heat input of the latest pass, kJ/mm", example: 1.2 }),
     strip: Strip.nullable(),
-    part_tag: z.string().meta({ description: "Tag of its part", example: "P-7K3F9Q2MX" }),
+    part_tag: z.string().meta({ description: "Tag of its part", example: "P-8K3F7Q2NA" }),
     part_name: z.string().meta({ description: "Title and serial of its part", example: "Skid frame 0418" }),
     changed_at: instant("Last fact recorded"),
   })

@@ -21,7 +21,7 @@ export const Account = z
     person_tag: z
       .string()
       .nullable()
-      .meta({ description: "Badge of the person behind the account", example: "W-4T7M2Q9XH" }),
+      .meta({ description: "Badge of the person behind the account", example: "W-8K3F7Q2NF" }),
   })
   .meta({ id: "Account" });
 export type Account = z.infer<typeof Account>;
@@ -45,7 +45,7 @@ export const Me = z
     cell_tag: z
       .string()
       .nullable()
-      .meta({ description: "The cell a key belongs to", example: "C-5N8R3W6YD" }),
+      .meta({ description: "The cell a key belongs to", example: "C-8K3F7Q2N6" }),
     account: Account.nullable().meta({ description: "The account, for people" }),
   })
   .meta({ id: "Me" });
