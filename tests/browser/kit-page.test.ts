@@ -97,7 +97,7 @@ describe("the kit by keyboard", () => {
     expect(await page.evaluate(() => document.activeElement?.getAttribute("role"))).toBe("slider");
     await page.keyboard.press("Escape");
     await page.keyboard.press("Enter");
-    await page.waitForURL(/seam=Skid%20frame%200399%20S6/);
+    await page.waitForURL(/open=Skid%20frame%200399%20S6/);
     await page.close();
   });
 

@@ -14,14 +14,22 @@ export type Judged<T> =
   | { readonly ok: true; readonly value: T; readonly errors: FieldErrors }
   | { readonly ok: false; readonly errors: FieldErrors };
 
+/** What a form is judged by. */
+export interface FormCheck<S extends z.ZodType> {
+  readonly schema: S;
+  readonly rules: SchemaRules;
+  /** What stood in the fields at first. */
+  readonly start: FormValues;
+  readonly units: LengthUnits;
+}
+
 /** Holds a form's values against its schema; every wrong field is named, the first fault of each. */
 export function judgeValues<S extends z.ZodType>(
-  schema: S,
-  rules: SchemaRules,
+  check: FormCheck<S>,
   values: FormValues,
-  units: LengthUnits,
 ): Judged<z.output<S>> {
-  const parsed = schema.safeParse(objectFrom(values, rules));
+  const { schema, rules, start, units } = check;
+  const parsed = schema.safeParse(objectFrom(values, rules, start));
   if (parsed.success) return { ok: true, value: parsed.data, errors: {} };
   const errors: Record<string, string> = {};
   for (const issue of parsed.error.issues) {

@@ -9,15 +9,16 @@ export function isEmptyValue(value: unknown): boolean {
 }
 
 /**
- * The object that a form stands for. What is empty is left out, or is null where the schema takes null and not
- * nothing; so an optional field left empty is absent, and the schema judges the rest.
+ * The object that a form stands for. What is empty is left out; it is null where the schema takes null and not nothing,
+ * or takes null and the field held something at the start: a change that clears it. The schema judges the rest.
  */
-export function objectFrom(values: FormValues, rules: SchemaRules): unknown {
+export function objectFrom(values: FormValues, rules: SchemaRules, start: FormValues = {}): unknown {
   const object: Record<string, unknown> = {};
   for (const [path, value] of Object.entries(values)) {
     const rule = ruleAt(rules, path);
     if (!isEmptyValue(value)) place(object, path.split("."), value);
-    else if (rule.nullable && rule.required) place(object, path.split("."), null);
+    else if (rule.nullable && (rule.required || !isEmptyValue(start[path])))
+      place(object, path.split("."), null);
   }
   return object;
 }

@@ -1,6 +1,7 @@
 import { type FormEvent, type ReactElement, type ReactNode, useEffect, useRef } from "react";
 import { Button } from "../actions/button.tsx";
 import { FaultPanel } from "../states/fault-panel.tsx";
+import { formatInstant } from "../units/instants.ts";
 import type { FormState } from "./use-form.ts";
 
 export interface FormProps {
@@ -54,13 +55,9 @@ export function Form(props: FormProps): ReactElement {
 }
 
 function Restored(props: { form: FormState; saved_at: string }): ReactElement {
-  const when = new Date(props.saved_at);
   return (
     <div className="flex flex-wrap items-center justify-between gap-x-4 rounded-sm border border-l-[3px] border-rule border-l-spark bg-hush px-4 py-1.5">
-      <p>
-        What you typed on {when.toLocaleDateString("en-GB", { day: "numeric", month: "short" })} at{" "}
-        {when.toLocaleTimeString("en-GB", { hour: "2-digit", minute: "2-digit" })} was kept and is back.
-      </p>
+      <p>What you typed on {formatInstant(props.saved_at)} was kept and is back.</p>
       <Button kind="quiet" onClick={props.form.startAnew}>
         Begin anew
       </Button>

@@ -21,7 +21,8 @@ const Piece = z.strictObject({
 const RULES = schemaRules(Piece);
 const MM = { unit: "mm", units: "mm" } as const;
 
-const judge = (values: Record<string, unknown>) => judgeValues(Piece, RULES, values, "mm");
+const judge = (values: Record<string, unknown>) =>
+  judgeValues({ schema: Piece, rules: RULES, start: {}, units: "mm" }, values);
 const whole = { position: "Web", thickness_mm: 12, note: "", count: 2 };
 
 describe("rules from a schema", () => {
@@ -83,6 +84,12 @@ describe("a form's values", () => {
       value: { position: "Web", thickness_mm: 12, note: null, count: 2 },
     });
     expect(objectFrom({ ...whole, gap_mm: null, welded_on: "" }, RULES)).not.toHaveProperty("gap_mm");
+  });
+
+  it("clear what stood there at the start with null, and leave out what never stood there", () => {
+    const rules = schemaRules(LotCreate);
+    expect(objectFrom({ thickness_mm: null }, rules)).toEqual({});
+    expect(objectFrom({ thickness_mm: null }, rules, { thickness_mm: 12 })).toEqual({ thickness_mm: null });
   });
 
   it("place fields inside records and lists by their path", () => {

@@ -48,7 +48,7 @@ export function useForm<S extends z.ZodType>(options: FormOptions<S>): FormState
   const [isTried, setTried] = useState(false);
   const [isBusy, setBusy] = useState(false);
   const [refusal, setRefusal] = useState<Refusal>({ errors: {}, problem: null });
-  const judged = judgeValues(schema, rules, values, units);
+  const judged = judgeValues({ schema, rules, start: options.start ?? {}, units }, values);
   const errors = isTried ? { ...refusal.errors, ...judged.errors } : {};
   const change = (path: string, value: unknown) => {
     const next = { ...values, [path]: value };

@@ -26,7 +26,13 @@ export const PlotPicture = memo(function PlotPicture(props: PictureProps): React
   const scales = plotScales(props);
   const { stations_mm, values, expanded_u, envelope } = spec;
   return (
-    <svg aria-hidden="true" width={layout.width} height={height} className="block overflow-visible">
+    <svg
+      aria-hidden="true"
+      width={layout.width}
+      height={height}
+      viewBox={`0 0 ${layout.width} ${height}`}
+      className="kit-drawing"
+    >
       <Limits spec={spec} scales={scales} layout={layout} />
       <ValueTicks spec={spec} scales={scales} layout={layout} />
       <BlindStretches spec={spec} scales={scales} height={height} />

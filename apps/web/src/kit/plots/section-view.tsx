@@ -36,7 +36,8 @@ export function SectionView(props: SectionViewProps): ReactElement {
             aria-label={sectionSummary(section, units)}
             width={place.width}
             height={place.height}
-            className="block"
+            viewBox={`0 0 ${place.width} ${place.height}`}
+            className="kit-drawing"
           >
             <Axes frame={frame} place={place} units={units} />
             <Drawing section={section} frame={frame} />

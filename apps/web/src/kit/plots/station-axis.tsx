@@ -46,7 +46,13 @@ export function StationAxis(props: StationAxisProps): ReactElement {
       onFocus={() => cursor_mm === null && props.onMove(props.stations_mm[0] ?? 0)}
       className="rounded-sm"
     >
-      <svg aria-hidden="true" width={layout.width} height={HEIGHT} className="block overflow-visible">
+      <svg
+        aria-hidden="true"
+        width={layout.width}
+        height={HEIGHT}
+        viewBox={`0 0 ${layout.width} ${HEIGHT}`}
+        className="kit-drawing"
+      >
         <line x1={range[0]} x2={range[1]} y1="0.5" y2="0.5" className="stroke-ink" />
         {ticks.map((tick) => {
           const x = Math.round(pixelOf(scale, tick)) + 0.5;

@@ -41,7 +41,7 @@ export function StationMarks(props: {
           <li
             key={`${mark.station_mm} ${mark.label}`}
             className={`absolute ${isLate ? "-translate-x-[calc(100%-6px)]" : "-translate-x-1.5"}`}
-            style={{ left: x, top: line * LINE_PX }}
+            style={{ left: `${(x / layout.width) * 100}%`, top: line * LINE_PX }}
           >
             <button
               type="button"

@@ -1,5 +1,6 @@
 import type { ReactElement } from "react";
 import { Button } from "../actions/button.tsx";
+import { KeyValue } from "../page/key-value.tsx";
 import { Sheet } from "../page/sheet.tsx";
 import { EmptyState } from "../states/empty-state.tsx";
 import { FaultPanel } from "../states/fault-panel.tsx";
@@ -8,6 +9,8 @@ import { problemWords } from "../states/problem-words.ts";
 import { Progress } from "../states/progress.tsx";
 import { StateMark } from "../states/state-mark.tsx";
 import { isStateName, STATE_LOOKS } from "../states/state-words.ts";
+import { DayText, InstantText } from "../units/instant-text.tsx";
+import { LengthText } from "../units/length-text.tsx";
 
 const PROBLEM = problemWords({
   type: "/docs/api/problems#file-value-invalid",
@@ -50,6 +53,16 @@ export function StateSpecimens(): ReactElement {
         as it comes in, with its certificate.
       </EmptyState>
       <FaultPanel problem={PROBLEM} onRetry={() => undefined} />
+      <Sheet title="Lengths and times">
+        <KeyValue
+          rows={[
+            { key: "Largest deviation", value: <LengthText length_mm={-3.41} signed /> },
+            { key: "Not measured", value: <LengthText length_mm={null} /> },
+            { key: "Welded", value: <InstantText at="2026-11-28T13:05:09.000Z" /> },
+            { key: "Came in", value: <DayText day="2026-11-24" /> },
+          ]}
+        />
+      </Sheet>
     </>
   );
 }

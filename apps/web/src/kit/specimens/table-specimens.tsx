@@ -7,6 +7,7 @@ import { BeadStrip } from "../strip/bead-strip.tsx";
 import type { Column } from "../tables/columns.ts";
 import { DataTable } from "../tables/data-table.tsx";
 import { FilterChoice, FilterText } from "../tables/filters.tsx";
+import { useUrlChoice, useUrlSort, useUrlText } from "../tables/url-state.ts";
 import { formatFigure } from "../units/length-units.ts";
 import { SPECIMEN_SEAMS, type SpecimenSeam } from "./specimen-data.ts";
 
@@ -65,7 +66,6 @@ const VERDICTS = [
   { value: "hold", label: "Hold" },
   { value: "accepted", label: "Accepted" },
 ] as const;
-type ListedVerdict = (typeof VERDICTS)[number]["value"];
 
 /** A long list with filters, and tabs. */
 export function TableSpecimens(): ReactElement {
@@ -86,8 +86,12 @@ export function TableSpecimens(): ReactElement {
 }
 
 function SeamList(): ReactElement {
-  const [text, setText] = useState("");
-  const [verdict, setVerdict] = useState<ListedVerdict | "">("");
+  const [text, setText] = useUrlText("seam");
+  const [verdict, setVerdict] = useUrlChoice(
+    "verdict",
+    VERDICTS.map((option) => option.value),
+  );
+  const [sort, setSort] = useUrlSort();
   const rows = MANY.filter((row) => row.key.includes(text) && (verdict === "" || row.verdict === verdict));
   return (
     <DataTable
@@ -95,8 +99,10 @@ function SeamList(): ReactElement {
       rows={rows}
       columns={COLUMNS}
       rowKey={(row) => row.key}
-      rowHref={(row) => `/kit?seam=${encodeURIComponent(row.key)}`}
+      rowHref={(row) => `/kit?open=${encodeURIComponent(row.key)}`}
       changed={new Set(["Skid frame 0200 S2"])}
+      sort={sort}
+      onSort={setSort}
       storeKey="kit-seams"
       fileName="seams"
       filters={

@@ -16,10 +16,15 @@ function beadOutline(commands: readonly StripCommand[]): string {
   return commands.map((command) => (command.kind === "ripple" ? ripplePath(command) : "")).join("");
 }
 
-/** The strip as SVG: crisp at any zoom and in print. */
+/** The strip as SVG: crisp at any zoom, and on paper as wide as its place there. */
 export const StripSvg = memo(function StripSvg({ commands, width, height }: PictureProps): ReactElement {
   return (
-    <svg aria-hidden="true" width={width} height={height} className="absolute top-0 left-0 overflow-visible">
+    <svg
+      aria-hidden="true"
+      viewBox={`0 0 ${width} ${height}`}
+      preserveAspectRatio="none"
+      className="absolute inset-0 size-full overflow-visible"
+    >
       <path d={beadOutline(commands)} fill="none" stroke="var(--bead-outline)" strokeWidth={OUTLINE_PX} />
       {commands.map((command) =>
         command.kind === "gap" ? (
@@ -74,8 +79,8 @@ export const StripCanvas = memo(function StripCanvas({
   return (
     <canvas
       ref={canvas}
-      className="absolute top-0 left-0 text-bead-outline"
-      style={{ width, height, outlineColor: "var(--ripple-line)" }}
+      className="absolute inset-0 size-full text-bead-outline"
+      style={{ outlineColor: "var(--ripple-line)" }}
     />
   );
 });

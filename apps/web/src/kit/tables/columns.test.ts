@@ -1,6 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { type Column, nextSort, parseSort, sortRows, sortText } from "./columns.ts";
 import { rowAfterKey } from "./row-keys.ts";
+import { withParam } from "./url-state.ts";
 
 interface Row {
   readonly seam: string;
@@ -65,4 +66,10 @@ describe("a table by keyboard", () => {
     expect(rowAfterKey("x", 3, 1200)).toBeNull();
     expect(rowAfterKey("ArrowDown", 0, 0)).toBeNull();
   });
+});
+
+it("keeps a filter in the URL beside the others, and takes it out when it is empty", () => {
+  const params = new URLSearchParams("verdict=hold&sort=-largest");
+  expect(withParam(params, "seam", "0412 S3").toString()).toBe("verdict=hold&sort=-largest&seam=0412+S3");
+  expect(withParam(params, "verdict", "").toString()).toBe("sort=-largest");
 });
