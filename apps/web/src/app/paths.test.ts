@@ -1,7 +1,7 @@
 import { expect, it } from "vitest";
+import { storedChoice } from "./choices/stored-choice.ts";
 import { navEntries, pageNames } from "./page-modules.ts";
 import { findPath, PATHS, pathTo } from "./paths.ts";
-import { storedChoice } from "./stored-choice.ts";
 
 it("leads to a page by its name", () => {
   expect(pathTo("parts")).toBe("/parts");

@@ -1,7 +1,7 @@
 import { QueryClient, QueryClientProvider } from "@tanstack/react-query";
 import type { ReactElement, ReactNode } from "react";
 import { UnitsProvider } from "../kit/units/units-context.tsx";
-import { useUnitsChoice } from "./units.ts";
+import { useUnitsChoice } from "./choices/units.ts";
 
 /** One cache of what the server said, for the whole application; loaders fill it, pages read it. */
 export const queryClient = new QueryClient({

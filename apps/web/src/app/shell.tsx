@@ -1,11 +1,11 @@
 import { type ReactElement, type ReactNode, useRef } from "react";
 import { ScrollRestoration } from "react-router";
 import { Announcer } from "../kit/states/announcer.tsx";
-import { FindField } from "./find-field.tsx";
-import { MainNav, NarrowNav } from "./main-nav.tsx";
-import { NavigationProgress } from "./navigation-progress.tsx";
-import { useRouteFocus } from "./route-focus.ts";
-import { UserMenu } from "./user-menu.tsx";
+import { FindField } from "./shell/find-field.tsx";
+import { MainNav, NarrowNav } from "./shell/main-nav.tsx";
+import { NavigationProgress } from "./shell/navigation-progress.tsx";
+import { useRouteFocus } from "./shell/route-focus.ts";
+import { UserMenu } from "./shell/user-menu.tsx";
 
 /** Who is signed in, as the bar shows it. The session hands this in; nobody signed in is null. */
 export interface ShellPerson {

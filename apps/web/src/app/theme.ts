@@ -1,5 +1,5 @@
 import { useSyncExternalStore } from "react";
-import { storedChoice } from "./stored-choice.ts";
+import { storedChoice } from "./choices/stored-choice.ts";
 
 export const THEMES = ["system", "light", "night"] as const;
 export type ThemeChoice = (typeof THEMES)[number];

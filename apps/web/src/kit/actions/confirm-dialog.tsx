@@ -1,5 +1,5 @@
 import { type FormEvent, type ReactElement, type ReactNode, useEffect, useId, useRef, useState } from "react";
-import { PasswordField } from "../forms/password-field.tsx";
+import { PasswordField } from "../fields/password-field.tsx";
 import { Button } from "./button.tsx";
 
 export interface ConfirmDialogProps {

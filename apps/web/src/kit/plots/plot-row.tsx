@@ -1,5 +1,5 @@
 import type { ReactElement } from "react";
-import { nearestStation } from "../strip/bead-strip-drawing.ts";
+import { nearestStation } from "../cursor/nearest-station.ts";
 import { pixelOf } from "./plot-frame.ts";
 import type { PlotLayout } from "./plot-layout.ts";
 import { PlotPicture, plotScales } from "./plot-picture.tsx";
@@ -40,10 +40,7 @@ export function PlotRow(props: PlotRowProps): ReactElement {
 
 /** The station of a plot nearest to the cursor. */
 export function indexAt(spec: PlotSpec, cursor_mm: number): number {
-  return nearestStation(
-    spec.stations_mm.map((station_mm) => ({ station_mm })),
-    cursor_mm,
-  );
+  return nearestStation(spec.stations_mm, cursor_mm);
 }
 
 function CursorMark(props: PlotRowProps & { at: number; cursor_mm: number }): ReactElement {

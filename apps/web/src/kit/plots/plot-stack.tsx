@@ -1,8 +1,8 @@
 import { type PointerEvent, type ReactElement, type ReactNode, useMemo, useRef, useState } from "react";
 import { Button } from "../actions/button.tsx";
 import { useStationCursor } from "../cursor/cursor-context.tsx";
+import { nearestStation } from "../cursor/nearest-station.ts";
 import { useWidth } from "../page/use-width.ts";
-import { nearestStation } from "../strip/bead-strip-drawing.ts";
 import { formatLength, type LengthUnits } from "../units/length-units.ts";
 import { useLengthUnits } from "../units/units-context.tsx";
 import { linearScale, valueAt } from "./plot-frame.ts";
@@ -42,7 +42,7 @@ export function PlotStack(props: PlotStackProps): ReactElement {
     if (box === undefined) return;
     const scale = linearScale(extent_mm, [layout.left, layout.width - layout.right]);
     const place_mm = valueAt(scale, event.clientX - box.left);
-    setCursor(nearestOf(stations_mm, place_mm));
+    setCursor(stations_mm[nearestStation(stations_mm, place_mm)] ?? null);
   };
   const toggle = <TableToggle isTable={isTable} onToggle={() => setTable(!isTable)} />;
   if (isTable) {
@@ -106,14 +106,6 @@ function longestAxis(plots: readonly PlotSpec[]): readonly number[] {
     (longest, plot) => (plot.stations_mm.length > longest.length ? plot.stations_mm : longest),
     [],
   );
-}
-
-function nearestOf(stations_mm: readonly number[], place_mm: number): number | null {
-  const index = nearestStation(
-    stations_mm.map((station_mm) => ({ station_mm })),
-    place_mm,
-  );
-  return stations_mm[index] ?? null;
 }
 
 /** Everything at the cursor in one sentence. */

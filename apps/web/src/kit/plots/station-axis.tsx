@@ -1,9 +1,10 @@
 import type { KeyboardEvent, ReactElement } from "react";
+import { nearestStation } from "../cursor/nearest-station.ts";
+import { indexAfterKey } from "../cursor/station-keys.ts";
 import { formatFigure, formatLength, fromMm } from "../units/length-units.ts";
 import { useLengthUnits } from "../units/units-context.tsx";
 import { linearScale, pixelOf, roundTicks, tickDecimals } from "./plot-frame.ts";
 import type { PlotLayout } from "./plot-layout.ts";
-import { stationAfterKey } from "./station-keys.ts";
 
 interface StationAxisProps {
   label: string;
@@ -22,16 +23,16 @@ const HEIGHT = 36;
 /** The axis under a stack of plots: its ticks, and the cursor as a slider for keys. */
 export function StationAxis(props: StationAxisProps): ReactElement {
   const units = useLengthUnits();
-  const { layout, extent_mm, cursor_mm } = props;
+  const { layout, extent_mm, cursor_mm, stations_mm } = props;
   const range: [number, number] = [layout.left, layout.width - layout.right];
   const scale = linearScale([fromMm(extent_mm[0], units), fromMm(extent_mm[1], units)], range);
   const ticks = roundTicks(scale.from[0], scale.from[1], Math.max(2, Math.floor((range[1] - range[0]) / 90)));
   const decimals = tickDecimals((ticks[1] ?? 1) - (ticks[0] ?? 0));
   const onKeyDown = (event: KeyboardEvent) => {
-    const next = stationAfterKey(event.key, props.stations_mm, cursor_mm);
+    const next = indexAfterKey(event.key, nearestStation(stations_mm, cursor_mm ?? 0), stations_mm.length);
     if (next === null) return;
     event.preventDefault();
-    props.onMove(next);
+    props.onMove(stations_mm[next] ?? 0);
   };
   return (
     <div
@@ -43,7 +44,7 @@ export function StationAxis(props: StationAxisProps): ReactElement {
       aria-valuenow={cursor_mm ?? extent_mm[0]}
       aria-valuetext={props.words}
       onKeyDown={onKeyDown}
-      onFocus={() => cursor_mm === null && props.onMove(props.stations_mm[0] ?? 0)}
+      onFocus={() => cursor_mm === null && props.onMove(stations_mm[0] ?? 0)}
       className="rounded-sm"
     >
       <svg

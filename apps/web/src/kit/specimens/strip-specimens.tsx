@@ -2,7 +2,7 @@ import type { ReactElement } from "react";
 import { CursorProvider } from "../cursor/cursor-context.tsx";
 import { Sheet } from "../page/sheet.tsx";
 import { PlotStack } from "../plots/plot-stack.tsx";
-import { SectionView } from "../plots/section-view.tsx";
+import { SectionView } from "../section/section-view.tsx";
 import { StateMark } from "../states/state-mark.tsx";
 import { BeadStrip } from "../strip/bead-strip.tsx";
 import { stationsFromShares } from "../strip/strip-from-shares.ts";

@@ -1,9 +1,9 @@
 import { describe, expect, it } from "vitest";
 import {
   drawStrip,
-  nearestStation,
   type RippleCommand,
   ripplePath,
+  stationAt,
   stationAtX,
   stripFrame,
   xOfStation,
@@ -147,8 +147,8 @@ describe("a strip's axis", () => {
   });
 
   it("names the nearer of two stations", () => {
-    expect(nearestStation(stations, 7.4)).toBe(1);
-    expect(nearestStation(stations, 7.6)).toBe(2);
+    expect(stationAt(stations, 7.4)).toBe(1);
+    expect(stationAt(stations, 7.6)).toBe(2);
   });
 });
 

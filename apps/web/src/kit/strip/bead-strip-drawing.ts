@@ -1,3 +1,4 @@
+import { nearestIndex } from "../cursor/nearest-station.ts";
 import { groupStations, type StripGroup, type StripStation, signOf } from "./strip-groups.ts";
 
 /** The place a strip is drawn in, in CSS pixels. */
@@ -114,24 +115,12 @@ export function xOfStation(frame: StripFrame, station_mm: number): number {
 /** The index of the station nearest to an x; stations in ascending order, at least one. */
 export function stationAtX(frame: StripFrame, stations: readonly StripStation[], x: number): number {
   const station_mm = frame.start_mm + ((x - frame.left) / frame.span) * (frame.end_mm - frame.start_mm);
-  return nearestStation(stations, station_mm);
+  return stationAt(stations, station_mm);
 }
 
-/** The index of the station nearest to a place; stations in ascending order, at least one. */
-export function nearestStation(
-  stations: readonly { readonly station_mm: number }[],
-  station_mm: number,
-): number {
-  let low = 0;
-  let high = stations.length - 1;
-  while (high - low > 1) {
-    const middle = (low + high) >> 1;
-    if ((stations[middle]?.station_mm ?? 0) <= station_mm) low = middle;
-    else high = middle;
-  }
-  const before = Math.abs((stations[low]?.station_mm ?? 0) - station_mm);
-  const after = Math.abs((stations[high]?.station_mm ?? 0) - station_mm);
-  return after < before ? high : low;
+/** The index of the station nearest to a place along the seam. */
+export function stationAt(stations: readonly StripStation[], station_mm: number): number {
+  return nearestIndex(stations.length, (index) => stations[index]?.station_mm ?? 0, station_mm);
 }
 
 /** A ripple as an SVG path, which a canvas takes too. */

@@ -1,12 +1,13 @@
-import { type KeyboardEvent, type ReactElement, type RefObject, useMemo, useRef, useState } from "react";
+import { type ReactElement, type RefObject, useMemo, useRef, useState } from "react";
 import { useStationCursor } from "../cursor/cursor-context.tsx";
+import { indexAfterKey } from "../cursor/station-keys.ts";
 import { useWidth } from "../page/use-width.ts";
 import { useLengthUnits } from "../units/units-context.tsx";
 import {
   drawStrip,
-  nearestStation,
   type StripCommand,
   type StripFrame,
+  stationAt,
   stationAtX,
   stripFrame,
   xOfStation,
@@ -54,7 +55,7 @@ export function BeadStrip(props: BeadStripProps): ReactElement {
       </div>
     );
   }
-  const at = cursor_mm === null ? null : nearestStation(stations, cursor_mm);
+  const at = cursor_mm === null ? null : stationAt(stations, cursor_mm);
   const station = at === null ? undefined : stations[at];
   const summary = stripSummary(stations, unit, units);
   const words = station === undefined ? null : stationWords(station, unit, units);
@@ -93,8 +94,10 @@ export function BeadStrip(props: BeadStripProps): ReactElement {
       }}
       onBlur={stopReading}
       onKeyDown={(event) => {
-        const next = stationAfterKey(event, at ?? 0, stations.length);
-        if (next !== null) goTo(next);
+        const next = indexAfterKey(event.key, at ?? 0, stations.length);
+        if (next === null) return;
+        event.preventDefault();
+        goTo(next);
       }}
     >
       <Picture commands={commands} width={width} height={HEIGHTS[size]} />
@@ -129,22 +132,6 @@ function useDrawing(
     };
     return { width, commands: drawStrip(stations, place), frame: stripFrame(stations, place) };
   }, [stations, width, size, left, right, length_mm]);
-}
-
-/** The station that a key leads to, or null if the key means nothing here. */
-function stationAfterKey(event: KeyboardEvent, at: number, count: number): number | null {
-  const steps: Record<string, number> = {
-    ArrowRight: at + 1,
-    ArrowLeft: at - 1,
-    PageUp: at + 10,
-    PageDown: at - 10,
-    Home: 0,
-    End: count - 1,
-  };
-  const next = steps[event.key];
-  if (next === undefined) return null;
-  event.preventDefault();
-  return Math.min(Math.max(next, 0), count - 1);
 }
 
 function StripCursor(props: { frame: StripFrame; station: StripStation }): ReactElement {

@@ -1,11 +1,11 @@
 import { useVirtualizer } from "@tanstack/react-virtual";
 import { type ReactElement, type ReactNode, useRef, useState } from "react";
+import { usePrinting } from "../page/use-printing.ts";
 import { type Column, nextSort, type Sort, sortRows } from "./columns.ts";
 import { useShownColumns } from "./shown-columns.ts";
 import { TableBody } from "./table-body.tsx";
 import { TableHead } from "./table-head.tsx";
 import { TableTools } from "./table-tools.tsx";
-import { usePrinting } from "./use-printing.ts";
 
 export interface DataTableProps<Row> {
   /** What the table holds, for those who listen. */

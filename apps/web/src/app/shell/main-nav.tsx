@@ -1,6 +1,6 @@
 import { type ReactElement, useId, useState } from "react";
 import { NavLink, useLocation } from "react-router";
-import { navEntries, pageModule } from "./page-modules.ts";
+import { navEntries, pageModule } from "../page-modules.ts";
 
 const ENTRIES = navEntries((name) => pageModule(name) !== undefined);
 

@@ -1,5 +1,5 @@
 import { expect, it } from "vitest";
-import { pixelOf } from "./plot-frame.ts";
+import { pixelOf } from "../plots/plot-frame.ts";
 import { sectionFrame } from "./section-frame.ts";
 
 const PLACE = { width: 420, height: 320, left: 44, right: 8, top: 8, bottom: 34 };

@@ -1,4 +1,4 @@
-import { extentOf, linearScale, padded, type Scale } from "./plot-frame.ts";
+import { extentOf, linearScale, padded, type Scale } from "../plots/plot-frame.ts";
 
 /** A point of a section: lateral, normal; mm. */
 export type SectionPoint = readonly [lateral_mm: number, normal_mm: number];

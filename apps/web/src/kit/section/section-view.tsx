@@ -1,9 +1,9 @@
 import type { SectionView as Section } from "@beadroll/domain/schemas/section-view";
 import { type ReactElement, useMemo, useRef } from "react";
 import { useWidth } from "../page/use-width.ts";
+import { linearScale, pixelOf, roundTicks, type Scale, tickDecimals } from "../plots/plot-frame.ts";
 import { formatFigure, formatLength, fromMm, type LengthUnits } from "../units/length-units.ts";
 import { useLengthUnits } from "../units/units-context.tsx";
-import { linearScale, pixelOf, roundTicks, type Scale, tickDecimals } from "./plot-frame.ts";
 import { type SectionFrame, type SectionPlace, type SectionPoint, sectionFrame } from "./section-frame.ts";
 
 export interface SectionViewProps {

@@ -1,8 +1,8 @@
 import { type ReactElement, useId } from "react";
-import type { ShellPerson } from "./shell.tsx";
-import { shortcutChoice, useShortcutChoice } from "./shortcuts.ts";
-import { chooseTheme, useThemeChoice } from "./theme.ts";
-import { unitsChoice, useUnitsChoice } from "./units.ts";
+import { shortcutChoice, useShortcutChoice } from "../choices/shortcuts.ts";
+import { unitsChoice, useUnitsChoice } from "../choices/units.ts";
+import type { ShellPerson } from "../shell.tsx";
+import { chooseTheme, useThemeChoice } from "../theme.ts";
 
 /** Who is signed in, and how this screen looks and counts. */
 export function UserMenu(props: { person: ShellPerson | null }): ReactElement {

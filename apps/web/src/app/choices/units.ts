@@ -1,5 +1,5 @@
 import { useSyncExternalStore } from "react";
-import type { LengthUnits } from "../kit/units/length-units.ts";
+import type { LengthUnits } from "../../kit/units/length-units.ts";
 import { storedChoice } from "./stored-choice.ts";
 
 export const unitsChoice = storedChoice<LengthUnits>("beadroll.units", ["mm", "in"]);

@@ -1,7 +1,7 @@
 import { type FormEvent, type ReactElement, useEffect, useRef } from "react";
 import { useNavigate } from "react-router";
-import { findPath } from "./paths.ts";
-import { shortcutChoice } from "./shortcuts.ts";
+import { shortcutChoice } from "../choices/shortcuts.ts";
+import { findPath } from "../paths.ts";
 
 const EDITABLE = "input, textarea, select, [contenteditable]";
 

@@ -1,6 +1,6 @@
 import { type RefObject, useEffect, useRef } from "react";
 import { useLocation } from "react-router";
-import { announce } from "../kit/states/announcements.ts";
+import { announce } from "../../kit/states/announcements.ts";
 
 /** After a change of page: the heading takes the focus and is read out, as soon as it is there. */
 export function useRouteFocus(main: RefObject<HTMLElement | null>): void {
