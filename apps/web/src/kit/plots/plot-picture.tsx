@@ -33,8 +33,8 @@ export const PlotPicture = memo(function PlotPicture(props: PictureProps): React
       viewBox={`0 0 ${layout.width} ${height}`}
       className="kit-drawing"
     >
-      <Limits spec={spec} scales={scales} layout={layout} />
       <ValueTicks spec={spec} scales={scales} layout={layout} />
+      <Limits spec={spec} scales={scales} layout={layout} />
       <BlindStretches spec={spec} scales={scales} height={height} />
       {envelope === undefined ? null : (
         <path d={bandPath(stations_mm, envelope.min, envelope.max, scales)} className="fill-ink/25" />
