@@ -10,9 +10,8 @@ export interface PageEntry {
 
 /** The one table of addresses. Pages link with `pathTo`, never with an address of their own. */
 export const PATHS = {
-  home: { path: "/", file: "home" },
   signIn: { path: "/sign-in", file: "sign-in" },
-  floor: { path: "/floor", file: "floor", nav: "Floor" },
+  floor: { path: "/", file: "floor", nav: "Floor" },
   parts: { path: "/parts", file: "parts", nav: "Parts" },
   partNew: { path: "/parts/new", file: "part-new" },
   part: { path: "/parts/:tag", file: "part" },
@@ -22,6 +21,12 @@ export const PATHS = {
   lot: { path: "/lots/:tag", file: "lot" },
   procedures: { path: "/procedures", file: "procedures", nav: "Procedures" },
   procedure: { path: "/procedures/:id", file: "procedure" },
+  drawings: { path: "/drawings", file: "drawings", nav: "Drawings" },
+  drawing: { path: "/drawings/:id", file: "drawing" },
+  people: { path: "/people", file: "people", nav: "People" },
+  person: { path: "/people/:tag", file: "person" },
+  users: { path: "/users", file: "users", nav: "Users and keys" },
+  tagDoor: { path: "/t/:tag", file: "tag-door" },
   inspection: { path: "/inspection", file: "inspection", nav: "Inspection" },
   reach: { path: "/reach", file: "reach", nav: "Reach" },
   drift: { path: "/drift", file: "drift", nav: "Drift" },

@@ -1,9 +1,21 @@
 import type { ReactElement } from "react";
-import { createBrowserRouter, Outlet, type RouteObject } from "react-router";
+import {
+  createBrowserRouter,
+  type LoaderFunctionArgs,
+  Navigate,
+  Outlet,
+  type RouteObject,
+  useLocation,
+  useNavigate,
+} from "react-router";
+import { toast } from "../kit/states/announcements.ts";
 import { Loading } from "../kit/states/loading.tsx";
+import { problemFrom } from "../kit/states/problem-words.ts";
 import { pageModule, pageNames } from "./page-modules.ts";
 import { PATHS, type PageName } from "./paths.ts";
 import { NotFound, RouteFault } from "./route-fault.tsx";
+import { requireSession, signInPath, signOut, useAccount } from "./session.ts";
+import { sessionState } from "./session-store.ts";
 import { Shell } from "./shell.tsx";
 
 /** Every page that exists, each with its own code, inside the shell. */
@@ -23,10 +35,26 @@ export function appRouter(): ReturnType<typeof createBrowserRouter> {
   ]);
 }
 
-/** The seam where the session hands the shell who is signed in. */
+/** Pages that open without an account. */
+const OPEN_PAGES: ReadonlySet<PageName> = new Set(["signIn", "kit"]);
+const OPEN_PATHS: ReadonlySet<string> = new Set([...OPEN_PAGES].map((name) => PATHS[name].path));
+
+/** The shell with who is signed in. A session that ends while a page is open leads to the sign-in page and back. */
 function ShellRoute(): ReactElement {
+  const account = useAccount();
+  const { pathname, search } = useLocation();
+  const navigate = useNavigate();
+  if (account === null && sessionState().status === "out" && !OPEN_PATHS.has(pathname))
+    return <Navigate to={signInPath(`${pathname}${search}`)} replace />;
+  const onSignOut = () => {
+    signOut().then(
+      () => navigate(PATHS.signIn.path),
+      (error: unknown) => toast(problemFrom(error).title),
+    );
+  };
+  const person = account && { name: account.name, role: account.roles.join(", "), onSignOut };
   return (
-    <Shell person={null}>
+    <Shell person={person}>
       <Outlet />
     </Shell>
   );
@@ -40,9 +68,15 @@ function pageRoute(name: PageName): RouteObject[] {
       path: PATHS[name].path,
       lazy: async () => {
         const page = await load();
-        return page.loader === undefined
-          ? { Component: page.default }
-          : { Component: page.default, loader: page.loader };
+        if (OPEN_PAGES.has(name)) return { Component: page.default };
+        const { loader } = page;
+        return {
+          Component: page.default,
+          loader: async (given: LoaderFunctionArgs) => {
+            await requireSession(given.request);
+            return loader === undefined ? null : loader(given);
+          },
+        };
       },
     },
   ];

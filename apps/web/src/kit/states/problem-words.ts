@@ -1,3 +1,4 @@
+import { Unreachable } from "@beadroll/client/api-problem";
 import { FAULT_KINDS, type FaultCode } from "@beadroll/domain/faults/codes";
 import { Problem } from "@beadroll/domain/schemas/problem";
 import { pathOfPointer } from "../forms/json-pointer.ts";
@@ -43,6 +44,7 @@ export function problemFrom(error: unknown): ProblemWords {
   const carried = error instanceof Error && "problem" in error ? error.problem : error;
   const parsed = Problem.safeParse(carried);
   if (parsed.success) return problemWords(parsed.data);
+  if (error instanceof Unreachable) return NOT_REACHED;
   if (error instanceof TypeError && /fetch|network|load failed/i.test(error.message)) return NOT_REACHED;
   return UNKNOWN;
 }
