@@ -2,7 +2,8 @@ import tailwindcss from "@tailwindcss/vite";
 import react from "@vitejs/plugin-react";
 import { defineConfig } from "vite";
 
-const API = "http://127.0.0.1:8080";
+/** The server that development talks to. */
+const API = process.env["BEADROLL_API"] ?? "http://127.0.0.1:8080";
 
 /** The framework, in one file of its own that stays in the browser's cache from release to release. */
 const FRAMEWORK =
@@ -12,7 +13,7 @@ export default defineConfig({
   plugins: [react(), tailwindcss()],
   server: {
     host: "127.0.0.1",
-    proxy: { "^/api/": API, "^/t/": API },
+    proxy: { "^/api/": API },
   },
   preview: { host: "127.0.0.1" },
   build: {
