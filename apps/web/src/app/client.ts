@@ -29,3 +29,6 @@ export function renewSession(): Promise<boolean> {
 
 /** The API, beside the application itself: no address is configured in the browser. */
 export const api: Client = createClient({ base_url: "", token: accessToken, renew: renewSession });
+
+/** The cursor of a list's first page; TypeScript would take a bare null for the only cursor there is. */
+export const FIRST_PAGE = null as string | null;
