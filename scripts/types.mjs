@@ -8,6 +8,7 @@ const projects = [
   "packages/domain/tsconfig.json",
   "packages/domain/tsconfig.test.json",
   "packages/client",
+  "packages/client/tsconfig.test.json",
   "apps/api",
   "apps/cli",
   "apps/web",

@@ -31,10 +31,16 @@ export class Unreachable extends Error {
   }
 }
 
-/** The server answered beside its contract: another version, or not a Beadroll server. */
+/** The server answered beside its contract: another version, most likely. What was sent has arrived. */
 export class UnexpectedAnswer extends Error {
-  constructor(operationId: string, what: string) {
-    super(`${operationId}: ${what}`);
+  readonly operation_id: string;
+  /** JSON pointer (RFC 6901) to the place in the answer; empty for the whole of it. */
+  readonly pointer: string;
+
+  constructor(operationId: string, pointer: string, what: string) {
+    super(`${operationId}: the answer does not fit at ${pointer || "its root"}: ${what}`);
     this.name = "UnexpectedAnswer";
+    this.operation_id = operationId;
+    this.pointer = pointer;
   }
 }
