@@ -1,0 +1,2 @@
+/** Version of the command. */
+export const VERSION = "0.1.0";
