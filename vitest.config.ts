@@ -12,6 +12,7 @@ export default defineConfig({
         test: {
           name: "api",
           include: ["apps/api/src/**/*.test.ts", "migrations/*.test.ts"],
+          globalSetup: "apps/api/src/testing/build-worker.ts",
           testTimeout: 60_000,
         },
       },

@@ -38,7 +38,7 @@ export function up(knex: Knex): Promise<void> {
       taken_at text not null,
       received_at text not null,
       received_from text not null,
-      ledger_seq integer not null references ledger_entries (seq)
+      ledger_seq integer not null references ledger_entries (seq) deferrable initially deferred
     ) STRICT`,
     `create unique index scans_content on scans (seam_id, attempt, stage, file_digest, coalesce(poses_digest, ''))`,
     `create index scans_seam on scans (seam_id, received_at)`,
@@ -65,7 +65,7 @@ export function up(knex: Knex): Promise<void> {
       result text not null check (json_valid(result)),
       received_at text not null,
       received_from text not null,
-      ledger_seq integer not null references ledger_entries (seq),
+      ledger_seq integer not null references ledger_entries (seq) deferrable initially deferred,
       unique (seam_id, attempt, pass_number)
     ) STRICT`,
     `create unique index passes_content on passes (seam_id, attempt, file_digest)`,
@@ -85,7 +85,7 @@ export function up(knex: Knex): Promise<void> {
       inspector_user_id text references users (id),
       performed_at text not null,
       received_at text not null,
-      ledger_seq integer not null references ledger_entries (seq)
+      ledger_seq integer not null references ledger_entries (seq) deferrable initially deferred
     ) STRICT`,
     `create index inspections_seam on inspections (seam_id, performed_at)`,
     `create index inspections_user on inspections (inspector_user_id)`,

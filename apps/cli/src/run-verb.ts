@@ -19,6 +19,11 @@ export function print(outcome: CommandOutcome, asJson: boolean): void {
 }
 
 function unexpected(error: unknown): CommandOutcome {
+  // The computer's own no: a full disk, a folder that is a file, a right that lacks.
+  if (error instanceof Error && "syscall" in error && "path" in error) {
+    const words = error.message.replace(/^[A-Z0-9]+: |, \w+ '.*$/g, "");
+    return failure(EXIT.failure, { error: "system", detail: `${error.path}: ${words}` });
+  }
   const detail = error instanceof Error ? error.message : String(error);
   const trace = error instanceof Error ? (error.stack ?? detail) : detail;
   return failure(

@@ -27,6 +27,13 @@ export function refusalText({ problem }: ApiProblem): string {
   return [`The server refused: ${problem.title}.`, ...lines.map((line) => `  ${line}`)].join("\n");
 }
 
+/** Words for a key that the server does not accept: its own are for people who sign in. */
+export function callerText(error: ApiProblem): string {
+  return error.status === 401
+    ? "The server does not accept this computer's key. Enrol again with a valid one: beadroll enrol"
+    : refusalText(error);
+}
+
 /** Whether the server refused because of who asks, not because of what was sent. */
 export const isAboutCaller = (error: ApiProblem): boolean => exitOfCode(error.code) === EXIT.not_allowed;
 

@@ -4,7 +4,14 @@ import { EXIT } from "../exit-codes.ts";
 import type { Look } from "../output/look.ts";
 import { type CommandOutcome, failure } from "../output/outcome.ts";
 import { receiptExit, receiptText } from "../output/receipt-text.ts";
-import { isAboutCaller, isPassing, refusalJson, refusalText, versionsDiffer } from "../server-client.ts";
+import {
+  callerText,
+  isAboutCaller,
+  isPassing,
+  refusalJson,
+  refusalText,
+  versionsDiffer,
+} from "../server-client.ts";
 import { DamagedEntry, type QueueEntry } from "./queue-entry.ts";
 import { readWaiting, seamOf, setAside, settle } from "./queue-folder.ts";
 import { type Receipt, sendEntry, WrongReceipt } from "./send-entry.ts";
@@ -15,32 +22,51 @@ export interface Delivery {
   readonly fate: "delivered" | "set-aside" | "waiting";
   /** What has to wait with it: its own seam, or everything because the cause is the server's. */
   readonly holds_back?: "seam" | "all";
+  /** Why it waits. */
+  readonly why?: string;
   readonly outcome: CommandOutcome;
 }
 
+/** What keeps an entry waiting: nothing of the server answered, or it did and the entry is not safe there yet. */
+type Hindrance = ApiProblem | Unreachable | UnexpectedAnswer | WrongReceipt;
+
+const isHindrance = (error: unknown): error is Hindrance =>
+  error instanceof ApiProblem ||
+  error instanceof Unreachable ||
+  error instanceof UnexpectedAnswer ||
+  error instanceof WrongReceipt;
+
+function hindranceCode(error: Hindrance): string {
+  if (error instanceof ApiProblem) return error.code;
+  return error instanceof Unreachable ? "unreachable" : "unexpected-answer";
+}
+
+function hindranceText(error: Hindrance): string {
+  if (error instanceof UnexpectedAnswer) return versionsDiffer(error);
+  return error instanceof ApiProblem && isAboutCaller(error) ? callerText(error) : error.message;
+}
+
+/** Only a fault that this very entry provokes leaves room to believe that another would pass. */
+const isOwnFault = (error: Hindrance): boolean =>
+  error instanceof ApiProblem ? error.status === 500 : !(error instanceof Unreachable);
+
+/** Where a person finds what was not delivered. */
+export const keptText = (id: string): string =>
+  `Kept in the queue, nothing is lost: ${id}\nIt goes with the next push of this seam, or now with: beadroll queue send`;
+
 /** Not delivered, not lost. */
-function waiting(id: string, error: Error): Delivery {
+function waiting(id: string, error: Hindrance): Delivery {
+  const why = hindranceText(error);
   const isCaller = error instanceof ApiProblem && isAboutCaller(error);
-  const why = error instanceof UnexpectedAnswer ? versionsDiffer(error) : error.message;
-  const code =
-    error instanceof ApiProblem
-      ? error.code
-      : error instanceof Unreachable
-        ? "unreachable"
-        : "unexpected-answer";
-  const talk = `${why}\nKept in the queue, nothing is lost: ${id}\nIt is sent with the next push of this seam, or now with: beadroll queue send`;
   const retry =
     error instanceof ApiProblem && error.retry_after_s !== null ? { retry_after_s: error.retry_after_s } : {};
-  const isOwn = error instanceof ApiProblem ? error.status === 500 : !(error instanceof Unreachable);
+  const json = { error: hindranceCode(error), detail: why, queued: id, ...retry };
   return {
     id,
     fate: "waiting",
-    holds_back: isOwn ? "seam" : "all",
-    outcome: failure(
-      isCaller ? EXIT.not_allowed : EXIT.queued,
-      { error: code, detail: why, queued: id, ...retry },
-      talk,
-    ),
+    holds_back: isOwnFault(error) ? "seam" : "all",
+    why,
+    outcome: failure(isCaller ? EXIT.not_allowed : EXIT.queued, json, `${why}\n${keptText(id)}`),
   };
 }
 
@@ -78,12 +104,7 @@ export async function deliver(id: string, client: Client, look: Look): Promise<D
   } catch (error) {
     if (error instanceof DamagedEntry) return damaged(id, error);
     if (error instanceof ApiProblem && !isPassing(error) && !isAboutCaller(error)) return refused(id, error);
-    const isKept =
-      error instanceof ApiProblem ||
-      error instanceof Unreachable ||
-      error instanceof UnexpectedAnswer ||
-      error instanceof WrongReceipt;
-    if (!isKept) throw error;
+    if (!isHindrance(error)) throw error;
     return waiting(id, error);
   }
 }

@@ -1,3 +1,4 @@
+import type { Permission } from "@beadroll/domain/auth/permissions";
 import type { ComponentType } from "react";
 import type { LoaderFunction } from "react-router";
 import { PATHS, type PageEntry, type PageName } from "./paths.ts";
@@ -15,13 +16,21 @@ export function pageModule(name: PageName): (() => Promise<PageModule>) | undefi
   return MODULES[`../pages/${PATHS[name].file}-page.tsx`];
 }
 
+/** A word of the top bar. */
+export interface NavEntry {
+  readonly name: PageName;
+  readonly path: string;
+  readonly nav: string;
+  readonly needs: Permission | null;
+}
+
 /** The words of the top bar, in order, for the pages that exist. */
-export function navEntries(
-  exists: (name: PageName) => boolean,
-): { name: PageName; path: string; nav: string }[] {
+export function navEntries(exists: (name: PageName) => boolean): NavEntry[] {
   return pageNames().flatMap((name) => {
     const entry: PageEntry = PATHS[name];
-    return entry.nav !== undefined && exists(name) ? [{ name, path: entry.path, nav: entry.nav }] : [];
+    return entry.nav !== undefined && exists(name)
+      ? [{ name, path: entry.path, nav: entry.nav, needs: entry.needs ?? null }]
+      : [];
   });
 }
 

@@ -1,3 +1,4 @@
+import type { Permission } from "@beadroll/domain/auth/permissions";
 import { generatePath } from "react-router";
 
 /** What a page of the application is: its address, the file that draws it, and its word in the top bar. */
@@ -6,6 +7,8 @@ export interface PageEntry {
   /** `src/pages/<file>-page.tsx`; as long as it does not exist there is no route and no word in the bar. */
   readonly file: string;
   readonly nav?: string;
+  /** The word in the bar is only for those who hold this. */
+  readonly needs?: Permission;
 }
 
 /** The one table of addresses. Pages link with `pathTo`, never with an address of their own. */
@@ -28,12 +31,12 @@ export const PATHS = {
   people: { path: "/people", file: "people", nav: "People" },
   personNew: { path: "/people/new", file: "person-new" },
   person: { path: "/people/:tag", file: "person" },
-  users: { path: "/users", file: "users", nav: "Users and keys" },
+  users: { path: "/users", file: "users", nav: "Users", needs: "users:manage" },
   tagDoor: { path: "/t/:tag", file: "tag-door" },
   inspection: { path: "/inspection", file: "inspection", nav: "Inspection" },
   reach: { path: "/reach", file: "reach", nav: "Reach" },
   drift: { path: "/drift", file: "drift", nav: "Drift" },
-  records: { path: "/records", file: "records", nav: "Records" },
+  records: { path: "/records", file: "records", nav: "Records", needs: "ledger:read" },
   find: { path: "/find", file: "find" },
   kit: { path: "/kit", file: "kit" },
 } as const satisfies Record<string, PageEntry>;

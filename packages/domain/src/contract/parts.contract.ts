@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { LABEL_LAYOUTS } from "../labels/label-sheets.ts";
 import { PageQuery, pageOf } from "../schemas/paging.ts";
 import { Part, PartCreate, PartPage, Piece, PieceCreate } from "../schemas/part.ts";
 import { contract } from "./contract.ts";
@@ -74,8 +75,6 @@ export const addPiece = contract({
   problems: ["request-invalid", "tag-invalid", "not-found", "state-conflict"],
 });
 
-export const LABEL_LAYOUTS = ["sheet-a4-3x8", "sheet-letter-3x10", "single"] as const;
-
 export const printLabels = contract({
   method: "get",
   path: "/parts/{tag}/labels",
@@ -114,5 +113,5 @@ export const printLabels = contract({
       .meta({ description: "Part and seams, one of them, or one part label with a strip of seam codes" }),
   }),
   answer: { status: 200, description: "PDF", media_type: "application/pdf" },
-  problems: ["tag-invalid", "not-found", "parameter-unknown"],
+  problems: ["tag-invalid", "not-found", "parameter-unknown", "request-invalid"],
 });

@@ -1,16 +1,25 @@
 import { type ReactElement, useId, useState } from "react";
 import { NavLink, useLocation } from "react-router";
-import { navEntries, pageModule } from "../page-modules.ts";
+import { type NavEntry, navEntries, pageModule } from "../page-modules.ts";
+import { useAccount } from "../session.ts";
 
 const ENTRIES = navEntries((name) => pageModule(name) !== undefined);
 
+/** The words for whoever is signed in; none before. */
+function useEntries(): readonly NavEntry[] {
+  const account = useAccount();
+  if (account === null) return [];
+  return ENTRIES.filter(({ needs }) => needs === null || account.permissions.includes(needs));
+}
+
 /** The words of the bar on a wide screen; where you are is marked with the spark. */
 export function MainNav(): ReactElement | null {
-  if (ENTRIES.length === 0) return null;
+  const entries = useEntries();
+  if (entries.length === 0) return null;
   return (
     <nav aria-label="Main" className="self-stretch max-lg:hidden">
       <ul className="flex h-full gap-7">
-        {ENTRIES.map((entry) => (
+        {entries.map((entry) => (
           <li key={entry.path} className="flex items-center">
             <NavLink
               to={entry.path}
@@ -28,10 +37,11 @@ export function MainNav(): ReactElement | null {
 /** The same words behind a button, where the screen is narrow; they fold away when one is chosen. */
 export function NarrowNav(): ReactElement | null {
   const id = useId();
+  const entries = useEntries();
   const { pathname } = useLocation();
   const [openOn, setOpenOn] = useState<string | null>(null);
   const isOpen = openOn === pathname;
-  if (ENTRIES.length === 0) return null;
+  if (entries.length === 0) return null;
   return (
     <>
       <button
@@ -45,7 +55,7 @@ export function NarrowNav(): ReactElement | null {
       </button>
       <nav id={id} aria-label="Main" hidden={!isOpen} className="w-full pb-4 lg:hidden">
         <ul className="grid grid-cols-2 gap-x-6">
-          {ENTRIES.map((entry) => (
+          {entries.map((entry) => (
             <li key={entry.path}>
               <NavLink
                 to={entry.path}

@@ -1,0 +1,2 @@
+/** Builds apps/api/dist. */
+export function buildApi(): Promise<void>;

@@ -1,0 +1,74 @@
+import type { Line } from "./line-fit.ts";
+
+/** Where a line is looked for. */
+export interface LineSearch {
+  /** Half the width of the direction window about the t axis, radians. */
+  readonly turn_rad: number;
+  /** Inlier band, mm. */
+  readonly band_mm: number;
+  readonly trials: number;
+  /** Seed of the draws: from the content, so that the same scan always gives the same answer. */
+  readonly seed: number;
+}
+
+/** Points scored in a trial: enough to rank lines, so that a dense section costs no more than a sparse one. */
+const SCORED_POINTS = 160;
+
+/** Marsaglia's xorshift, 32 bits. */
+export function drawsFrom(seed: number): () => number {
+  let state = seed | 0 || 0x9e3779b9 | 0;
+  return () => {
+    state ^= state << 13;
+    state ^= state >>> 17;
+    state ^= state << 5;
+    return (state >>> 0) / 4294967296;
+  };
+}
+
+/** How well a line through two points explains the rest: truncated squared distances, so that near beats far. */
+function support(ts: Float64Array, ds: Float64Array, count: number, line: Line, band_mm: number): number {
+  const every = Math.max(1, Math.floor(count / SCORED_POINTS));
+  const cos = Math.cos(line.angle_rad);
+  const sin = Math.sin(line.angle_rad);
+  const by = 1 / (band_mm * band_mm);
+  let score = 0;
+  for (let i = 0; i < count; i += every) {
+    const r = (ds[i]! - line.d_mm) * cos - (ts[i]! - line.t_mm) * sin;
+    const rest = 1 - r * r * by;
+    if (rest > 0) score += rest;
+  }
+  return (score * every) / count;
+}
+
+/**
+ * The line that most of the points agree on, drawn from pairs of them (RANSAC with truncated loss), its direction
+ * kept within a window about the t axis.
+ * @returns the line and the share of the points in its band; null where no pair lies in the window
+ * Source: Fischler and Bolles 1981; Torr and Zisserman 2000 for the loss.
+ */
+export function consensusLine(
+  ts: Float64Array,
+  ds: Float64Array,
+  count: number,
+  search: LineSearch,
+): { readonly line: Line; readonly share: number } | null {
+  if (count < 3) return null;
+  const draw = drawsFrom(search.seed);
+  const steepest = Math.tan(search.turn_rad);
+  let best: Line | null = null;
+  let share = 0;
+  for (let trial = 0; trial < search.trials; trial++) {
+    const i = Math.floor(draw() * count);
+    const j = Math.floor(draw() * count);
+    const run = ts[j]! - ts[i]!;
+    const rise = ds[j]! - ds[i]!;
+    // Two neighbours give no direction: noise of the band's size would turn the line out of its window.
+    if (Math.abs(run) < 4 * search.band_mm || Math.abs(rise) > steepest * Math.abs(run)) continue;
+    const line = { t_mm: ts[i]!, d_mm: ds[i]!, angle_rad: Math.atan(rise / run) };
+    const score = support(ts, ds, count, line, search.band_mm);
+    if (score <= share) continue;
+    share = score;
+    best = line;
+  }
+  return best && { line: best, share };
+}
