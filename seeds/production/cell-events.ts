@@ -1,6 +1,6 @@
 import { type Calendar, instantOf } from "../calendar.ts";
 import { DEMO_KEYS } from "../demo-accounts.ts";
-import type { DemoEvent, PlannedEvent, Ref } from "../demo-event.ts";
+import type { DemoEvent, PlannedEvent, Ref, SeamRef } from "../demo-event.ts";
 import { Random } from "../random.ts";
 import { lotDecision } from "../shop/lots.ts";
 import { procedureOf } from "../shop/procedures.ts";
@@ -8,6 +8,7 @@ import { longestWait, type PassPlan, passDuration, passLogCsv } from "../simulat
 import { scanSeam } from "../simulate/scan-seam.ts";
 import { commonFit, type Fit, fitUpFor, partPose } from "./fit-ups.ts";
 import { type Operator, operatorsOf } from "./operators.ts";
+import { type Misfit, PARTS } from "./part-plan.ts";
 import type { TimedTask } from "./schedule.ts";
 import type { CellTask, MountTask, PassTask, ScanTask } from "./tasks.ts";
 
@@ -55,22 +56,37 @@ function keyNameOf(cell: Ref): string {
   return key.name;
 }
 
+/** The random stream of a scan; its first draw, where nothing is told about the joint, is how the joint stands. */
+function scanRandom(seed: number, seam: SeamRef, again: boolean): Random {
+  return new Random(seed, `scan ${seam.part} ${seam.number} ${again ? "again" : "first"}`);
+}
+
+function fitOf(misfit: Misfit | null, random: Random): Fit {
+  return misfit ?? commonFit(random);
+}
+
+/** How a joint was made to stand for a scan, for those who check the scenario. */
+export function intendedFit(seed: number, seam: SeamRef, again: boolean): Fit {
+  const part = PARTS.find(({ ref }) => ref === seam.part);
+  const misfit = again ? undefined : (part?.held[seam.number] ?? part?.refitted[seam.number]);
+  return fitOf(misfit ?? null, scanRandom(seed, seam, again));
+}
+
 function scanEvent(task: ScanTask, { seed, calendar, cell, hour }: Floor): PlannedEvent {
   const { part, seam, again, misfit } = task;
   const taken_ms = calendar.at(hour);
   const at_ms = taken_ms + SCAN_SENT_S * 1000;
+  const on: SeamRef = { part: part.ref, number: seam.number };
   const make = (): DemoEvent => {
-    const subject = `${part.ref} ${seam.number} ${again ? "again" : "first"}`;
-    const random = new Random(seed, `scan ${subject}`);
-    const fit: Fit = misfit ?? commonFit(random);
-    const fitUp = fitUpFor(seam, fit, random);
+    const random = scanRandom(seed, on, again);
+    const fitUp = fitUpFor(seam, fitOf(misfit, random), random);
     const pose = partPose(new Random(seed, `pose ${part.ref}`));
     const name = `${part.serial}-${seam.number}-fitup-${again ? 2 : 1}.ply`;
     return {
       kind: "scan",
       at: instantOf(at_ms),
       by: keyNameOf(cell),
-      seam: { part: part.ref, number: seam.number },
+      seam: on,
       cell,
       fields: { stage: "fitup", units: "mm", taken_at: instantOf(taken_ms) },
       file: { name, bytes: scanSeam({ seam, fitUp, pose }, random) },
