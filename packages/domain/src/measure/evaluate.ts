@@ -1,160 +1,84 @@
-// PROVISIONAL
 import { good, type Outcome, refused } from "../faults/fault.ts";
-import type { ScanResult, StationResult } from "../schemas/scan-result.ts";
-import { resolveLimits, type SeamModel } from "../schemas/seam-model.ts";
+import type { ScanResult } from "../schemas/scan-result.ts";
+import type { SeamModel } from "../schemas/seam-model.ts";
+import { jointSeries } from "./along/joint-series.ts";
+import { judgeScan } from "./judge/judge-scan.ts";
+import { endsOf } from "./result/ends.ts";
+import { remainingPart } from "./result/remaining.ts";
+import { rigidPart } from "./result/rigid.ts";
+import { stationResults } from "./result/station-results.ts";
+import { coverageOf, summaryOf } from "./result/summary.ts";
+import { warningsOf } from "./result/warnings.ts";
 import type { ScanCloud } from "./scan-cloud.ts";
+import { type MeasuredSeam, measureSeam } from "./seam/measure-seam.ts";
+import { stationFrames } from "./seam/seam-frames.ts";
+import { unitMistake } from "./units-check.ts";
 
-export interface Line {
-  cx: number;
-  cy: number;
-  dx: number;
-  dy: number;
-  n: number;
-  rms: number;
-  pts: [number, number][];
+/** Name and version of the measuring code; the version changes whenever a number might. */
+export const MEASURE_ENGINE = "beadroll-measure 1.0.0";
+
+/** How a scan is to be evaluated. */
+export interface EvaluateOptions {
+  /** Distance between stations, mm, > 0; absent: the model's own stations. */
+  readonly step_mm?: number;
+  /** Half-width of the scanner's stated accuracy, mm, ≥ 0; absent: not known, and said so in the warnings. */
+  readonly scanner_accuracy_mm?: number;
 }
-type P = [number, number];
-function lineThrough(pts: P[]): Line {
-  let mx = 0,
-    my = 0;
-  for (const p of pts) {
-    mx += p[0];
-    my += p[1];
-  }
-  mx /= pts.length;
-  my /= pts.length;
-  let sxx = 0,
-    sxy = 0,
-    syy = 0;
-  for (const p of pts) {
-    const a = p[0] - mx,
-      b = p[1] - my;
-    sxx += a * a;
-    sxy += a * b;
-    syy += b * b;
-  }
-  const th = 0.5 * Math.atan2(2 * sxy, sxx - syy);
-  const dx = Math.cos(th),
-    dy = Math.sin(th);
-  let s = 0;
-  for (const p of pts) {
-    const r = (p[0] - mx) * -dy + (p[1] - my) * dx;
-    s += r * r;
-  }
-  return { cx: mx, cy: my, dx, dy, n: pts.length, rms: Math.sqrt(s / Math.max(1, pts.length - 2)), pts };
+
+/** A scan is looked at for a mistaken unit only where less than this share of its stations was measured. */
+const SUSPECT_SHARE = 0.5;
+
+const NO_MOTION: ScanResult["rigid"] = {
+  translation_mm: [0, 0, 0],
+  rotation_deg: [0, 0, 0],
+  unobservable: ["all"],
+};
+
+function pointsUsed({ outcomes }: MeasuredSeam): number {
+  return outcomes.reduce(
+    (sum, one) => sum + (one.found ? one.result.fits.reduce((n, fit) => n + (fit?.inliers ?? 0), 0) : 0),
+    0,
+  );
 }
-function ransac(pts: P[], dir: P, seed: number): Line | null {
-  if (pts.length < 6) return null;
-  let best: P[] = [];
-  let s = seed;
-  const rnd = () => {
-    s = (s * 1103515245 + 12345) & 0x7fffffff;
-    return s / 0x7fffffff;
-  };
-  for (let k = 0; k < 40; k++) {
-    const a = pts[Math.floor(rnd() * pts.length)]!,
-      b = pts[Math.floor(rnd() * pts.length)]!;
-    const dx = b[0] - a[0],
-      dy = b[1] - a[1],
-      l = Math.hypot(dx, dy);
-    if (l < 1 || Math.abs((dx * dir[0] + dy * dir[1]) / l) < 0.95) continue;
-    const inl = pts.filter((p) => Math.abs(((p[0] - a[0]) * -dy + (p[1] - a[1]) * dx) / l) < 0.15);
-    if (inl.length > best.length) best = inl;
-  }
-  if (best.length < 5) return null;
-  return lineThrough(best);
-}
-export function sectionPoints(
-  _model: SeamModel,
-  cloud: ScanCloud,
-  v: SeamModel["seam"]["vertices"][number],
-  half: number,
-): P[] {
-  const out: P[] = [];
-  const { xyz_mm: x } = cloud;
-  for (let i = 0; i < cloud.count; i++) {
-    const a = x[3 * i]! - v.point[0],
-      b = x[3 * i + 1]! - v.point[1],
-      c = x[3 * i + 2]! - v.point[2];
-    const t = a * v.tangent[0] + b * v.tangent[1] + c * v.tangent[2];
-    if (t > half || t < -half) continue;
-    const l = a * v.lateral[0] + b * v.lateral[1] + c * v.lateral[2];
-    const n = a * v.normal[0] + b * v.normal[1] + c * v.normal[2];
-    if (Math.abs(l) < 30 && Math.abs(n) < 30) out.push([l, n]);
-  }
-  return out;
-}
-export function twoPlates(pts: P[]): { a: Line; b: Line; root: P } | null {
-  const a = ransac(pts, [1, 0], 7);
-  const b = ransac(pts, [0, 1], 11);
-  if (!a || !b) return null;
-  const det = a.dx * -b.dy + b.dx * a.dy;
-  const u = ((b.cx - a.cx) * -b.dy + b.dx * (b.cy - a.cy)) / det;
-  return { a, b, root: [a.cx + u * a.dx, a.cy + u * a.dy] };
-}
+
+/**
+ * Holds a scan against its model: deviation, gap, mismatch and angle at each station with their uncertainty, ends,
+ * coverage, the rigid part, and the verdict with every reason. How each number is found stands in docs/measuring.md.
+ * @param model from `parseSeamModel`
+ * @param cloud from `readScan`, mm, part frame
+ * @returns the result, or the fault `scan-units-implausible` where the scan fits only in another unit
+ * @throws RangeError for a step that is not positive
+ *
+ * Pure and deterministic: the same model and scan give the same result on every machine.
+ */
 export function evaluateScan(
   model: SeamModel,
   cloud: ScanCloud,
-  _o: { scanner_accuracy_mm?: number; step_mm?: number } = {},
+  options: EvaluateOptions = {},
 ): Outcome<ScanResult> {
-  const vs = model.seam.vertices;
-  const half = (vs[1]!.station_mm - vs[0]!.station_mm) / 2;
-  const stations: StationResult[] = vs.map((v) => {
-    const pts = sectionPoints(model, cloud, v, half);
-    const r = pts.length > 12 ? twoPlates(pts) : null;
-    if (!r) return { station_mm: v.station_mm, measured: false, why: "no_points" };
-    return {
-      station_mm: v.station_mm,
-      measured: true,
-      lateral_mm: r.root[0],
-      normal_mm: r.root[1],
-      gap_mm: 0,
-      angle_deg: 0,
-      u_lateral_mm: 0.03,
-      u_normal_mm: 0.03,
-    };
-  });
-  const m = stations.filter((s) => s.measured);
-  if (m.length === 0 && !vs.some((v) => sectionPoints(model, cloud, v, 3).length > 5))
-    return refused({ code: "scan-units-implausible", detail: "The scan does not fit the model." });
-  const lim = resolveLimits(model.limits);
-  const worst = Math.max(...m.map((s) => Math.abs(s.lateral_mm ?? 0)), 0);
-  const at = m.find((s) => Math.abs(s.lateral_mm ?? 0) === worst)?.station_mm ?? 0;
-  const share = m.length / stations.length;
-  const verdict =
-    worst > lim.adapt.lateral_mm || share < lim.coverage_share
-      ? "hold"
-      : worst > lim.within.lateral_mm
-        ? "adapt"
-        : "within";
+  const frames = stationFrames(model, options.step_mm);
+  const seam = measureSeam(model, cloud);
+  const along = jointSeries(seam);
+  const scanner_accuracy_mm = options.scanner_accuracy_mm ?? 0;
+  const stations = stationResults({ seam, along, frames, scanner_accuracy_mm });
+  const coverage = coverageOf(stations);
+  const mistake = coverage.share < SUSPECT_SHARE ? unitMistake(model, seam.joint, cloud) : null;
+  if (mistake) return refused({ code: "scan-units-implausible", detail: mistake });
+  const rigid = rigidPart(stations, frames);
   return good({
-    engine: "provisional 0",
+    engine: MEASURE_ENGINE,
     model: model.case ?? "",
     joint_type: model.joint_type,
     points: cloud.count,
-    points_used: cloud.count,
+    points_used: pointsUsed(seam),
     points_lost: cloud.lost,
-    verdict,
-    reasons:
-      verdict === "within"
-        ? []
-        : [
-            {
-              check: "lateral",
-              station_mm: at,
-              value: worst,
-              limit: lim.adapt.lateral_mm,
-              unit: "mm",
-              level: verdict === "hold" ? "adapt" : "within",
-              proof: "outside",
-              text: `Lateral ${worst.toFixed(2)} mm at ${at} mm`,
-            },
-          ],
-    warnings: [],
-    coverage: { share, longest_blind_mm: 0 },
-    ends: { start_mm: 0, end_mm: model.seam.length_mm, start_seen: false, end_seen: false },
-    rigid: { translation_mm: [0, 0, 0], rotation_deg: [0, 0, 0], unobservable: [] },
-    summary: { lateral_mm: { max_abs: worst, at_mm: at, rms: worst / 2, p95_abs: worst } },
+    ...judgeScan(model, stations, coverage),
+    warnings: warningsOf({ seam, along, stations, cloud, options }),
+    coverage,
+    ends: endsOf(seam),
+    rigid: rigid?.report ?? NO_MOTION,
+    ...(rigid && { remaining: remainingPart(stations, frames, rigid.motion) }),
+    summary: summaryOf(stations),
     stations,
-  } as unknown as ScanResult);
+  });
 }

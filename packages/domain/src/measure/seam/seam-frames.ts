@@ -1,11 +1,5 @@
 import type { SeamModel, SeamVertex } from "../../schemas/seam-model.ts";
 
-/** How far past each end stations are added, to see whether the joint runs on there. */
-const RUN_OFF_MM = 10;
-
-/** A section never takes points from farther along the seam than this, however sparse the stations. */
-const WIDEST_HALF_MM = 2.5;
-
 /** Frames closer than this (mm, and as a difference of unit vectors) count as one straight line. */
 const STRAIGHT_MM = 1e-4;
 
@@ -14,9 +8,6 @@ type Vector = readonly [number, number, number];
 /** Stations along the nominal line with their section frames, part frame, stored flat (length 3 count). */
 export interface SeamFrames {
   readonly count: number;
-  /** Index of the first station that is reported; those before it and after the last only look for the ends. */
-  readonly first: number;
-  readonly reported: number;
   readonly closed: boolean;
   /** True when all frames are the same and the points lie on one line. */
   readonly straight: boolean;
@@ -25,8 +16,6 @@ export interface SeamFrames {
   readonly tangents: Float64Array;
   readonly laterals: Float64Array;
   readonly normals: Float64Array;
-  /** Half the length along the seam that each station's section covers, mm. */
-  readonly halves_mm: Float64Array;
 }
 
 interface Frame {
@@ -93,14 +82,6 @@ function everyStep(vertices: readonly SeamVertex[], step_mm: number): Frame[] {
   return frames;
 }
 
-function runOff(from: Frame, spacing_mm: number, way: -1 | 1): Frame[] {
-  const steps = Math.min(50, Math.floor(RUN_OFF_MM / spacing_mm));
-  return Array.from({ length: Math.max(0, steps) }, (_, i) => {
-    const by = way * (i + 1) * spacing_mm;
-    return { ...from, station_mm: from.station_mm + by, point: add(from.point, from.tangent, by) };
-  });
-}
-
 function isStraight(frames: readonly Frame[]): boolean {
   const first = frames[0];
   if (!first) return true;
@@ -123,53 +104,44 @@ function withoutRepeat(frames: Frame[], closed: boolean): Frame[] {
   return Math.hypot(...add(last.point, first.point, -1)) < 1e-3 ? frames.slice(0, -1) : frames;
 }
 
-/**
- * Frames at the model's own vertices, or every `step_mm` between the first and the last of them.
- * @param step_mm > 0; absent: the vertices themselves
- * @returns stations in growing order with up to 10 mm of stations added past each open end
- * @throws RangeError for a step that is not positive
- */
-export function seamFrames(model: SeamModel, step_mm?: number): SeamFrames {
-  if (step_mm !== undefined && !(step_mm > 0)) throw new RangeError(`step_mm: expected > 0, got ${step_mm}`);
-  const { vertices } = model.seam;
+const ownFrames = (model: SeamModel) =>
+  model.seam.vertices.map((v) => squared(v.station_mm, v.point, v.tangent, v.lateral, v.normal));
+
+/** Frames along the nominal line, at the model's own vertices: what points are placed by. */
+export function lineFrames(model: SeamModel): SeamFrames {
   const closed = model.seam.closed ?? false;
-  const own =
-    step_mm === undefined
-      ? vertices.map((v) => squared(v.station_mm, v.point, v.tangent, v.lateral, v.normal))
-      : everyStep(vertices, step_mm);
-  const frames = withoutRepeat(own, closed);
-  const spacings = frames.slice(1).map((frame, i) => frame.station_mm - (frames[i]?.station_mm ?? 0));
-  const usual_mm = spacings.length > 0 ? [...spacings].sort((a, b) => a - b)[spacings.length >> 1] : 1;
-  const spacing_mm = Math.min(usual_mm ?? 1, 2 * WIDEST_HALF_MM);
-  const [start, end] = [frames[0], frames.at(-1)];
-  const before = closed || !start ? [] : runOff(start, spacing_mm, -1).reverse();
-  const after = closed || !end ? [] : runOff(end, spacing_mm, 1);
-  return flat([...before, ...frames, ...after], { first: before.length, reported: frames.length, closed });
+  return flat(withoutRepeat(ownFrames(model), closed), closed);
 }
 
-function flat(
-  frames: readonly Frame[],
-  kind: { readonly first: number; readonly reported: number; readonly closed: boolean },
-): SeamFrames {
+/**
+ * Frames of the stations that results stand at: the model's own vertices, or every `step_mm` from the first on.
+ * @param step_mm > 0; absent: the vertices themselves
+ * @throws RangeError for a step that is not positive
+ */
+export function stationFrames(model: SeamModel, step_mm?: number): SeamFrames {
+  if (step_mm !== undefined && !(step_mm > 0)) throw new RangeError(`step_mm: expected > 0, got ${step_mm}`);
+  const frames = step_mm === undefined ? ownFrames(model) : everyStep(model.seam.vertices, step_mm);
+  return flat(frames, model.seam.closed ?? false);
+}
+
+function flat(frames: readonly Frame[], closed: boolean): SeamFrames {
   const vectors = (key: "point" | "tangent" | "lateral" | "normal") =>
     Float64Array.from(frames.flatMap((frame) => frame[key]));
-  const stations_mm = Float64Array.from(frames, (frame) => frame.station_mm);
-  const halves_mm = Float64Array.from(frames, (_, i) => {
-    const here = stations_mm[i] ?? 0;
-    const back = here - (stations_mm[i - 1] ?? Number.NEGATIVE_INFINITY);
-    const on = (stations_mm[i + 1] ?? Number.POSITIVE_INFINITY) - here;
-    const nearest = Math.min(back, on);
-    return Math.min(WIDEST_HALF_MM, Number.isFinite(nearest) ? nearest / 2 : WIDEST_HALF_MM);
-  });
   return {
     count: frames.length,
-    ...kind,
-    straight: !kind.closed && isStraight(frames),
-    stations_mm,
+    closed,
+    straight: !closed && isStraight(frames),
+    stations_mm: Float64Array.from(frames, (frame) => frame.station_mm),
     points_mm: vectors("point"),
     tangents: vectors("tangent"),
     laterals: vectors("lateral"),
     normals: vectors("normal"),
-    halves_mm,
   };
+}
+
+/** A point given in a station's section frame, in the part frame, mm. */
+export function toPart(frames: SeamFrames, i: number, l_mm: number, n_mm: number): [number, number, number] {
+  const at = (k: number) =>
+    frames.points_mm[3 * i + k]! + l_mm * frames.laterals[3 * i + k]! + n_mm * frames.normals[3 * i + k]!;
+  return [at(0), at(1), at(2)];
 }

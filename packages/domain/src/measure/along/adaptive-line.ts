@@ -1,0 +1,121 @@
+import type { Series } from "./scatter.ts";
+
+/** The longest stretch to either side that a value may lean on, mm. */
+export const SPAN_MM = 15;
+
+/** Slices to either side, at most. */
+const MOST_SLICES = 15;
+
+/** Windows grow by about a half each time. */
+const WIDTHS = [1, 2, 3, 5, 7, 10, 15];
+
+/** How far two windows' estimates may lie apart, in standard uncertainties, and still be of one straight stretch. */
+const AGREEMENT = 2;
+
+/** Empty stretches this many times the usual pitch are not bridged. */
+const BRIDGE = 2.6;
+
+/** A value along the seam with its standard uncertainty. */
+export interface Estimate {
+  readonly value: number;
+  readonly u: number;
+}
+
+/** Weighted sums of powers of x, and of y times powers of x. */
+type Sums = Float64Array;
+const noSums = (): Sums => new Float64Array(8);
+
+function add(sums: Sums, x: number, y: number, u: number): void {
+  const w = 1 / (u * u);
+  sums[0]! += w;
+  sums[1]! += w * x;
+  sums[2]! += w * x * x;
+  sums[3]! += w * x * x * x;
+  sums[4]! += w * x * x * x * x;
+  sums[5]! += w * y;
+  sums[6]! += w * x * y;
+  sums[7]! += w * x * x * y;
+}
+
+/** The weighted straight line's value at x = 0; a mean where all points lie at one place. */
+function lineAtZero(sums: Sums): Estimate {
+  const [w = 0, x = 0, xx = 0, , , y = 0, xy = 0] = sums;
+  const det = w * xx - x * x;
+  if (det <= 1e-9 * w * xx) return { value: y / w, u: 1 / Math.sqrt(w) };
+  return { value: (xx * y - x * xy) / det, u: Math.sqrt(xx / det) };
+}
+
+/** The weighted parabola's value at x = 0; null where the places do not carry one. Cramer's rule. */
+function parabolaAtZero(sums: Sums): Estimate | null {
+  const [s0 = 0, s1 = 0, s2 = 0, s3 = 0, s4 = 0, y0 = 0, y1 = 0, y2 = 0] = sums;
+  const c0 = s2 * s4 - s3 * s3;
+  const c1 = s2 * s3 - s1 * s4;
+  const c2 = s1 * s3 - s2 * s2;
+  const det = s0 * c0 + s1 * c1 + s2 * c2;
+  if (!(det > 1e-9 * s0 * s2 * s4)) return null;
+  return { value: (c0 * y0 + c1 * y1 + c2 * y2) / det, u: Math.sqrt(c0 / det) };
+}
+
+const measured = ({ values, u }: Series, k: number) => Number.isFinite(values[k]) && u[k]! > 0;
+
+/** The slices to one side of `from`, itself first, none across a blind stretch. */
+function onSide(series: Series, from: number, way: -1 | 1, pitch_mm: number): number[] {
+  const side: number[] = [];
+  let last_mm = series.at_mm[from]!;
+  for (let k = from; k >= 0 && k < series.values.length && side.length <= MOST_SLICES; k += way) {
+    const at_mm = series.at_mm[k]!;
+    if (Math.abs(at_mm - last_mm) > BRIDGE * pitch_mm + 1e-9) break;
+    if (Math.abs(at_mm - series.at_mm[from]!) > SPAN_MM) break;
+    if (!measured(series, k)) continue;
+    last_mm = at_mm;
+    side.push(k);
+  }
+  return side;
+}
+
+/** How many slices of a side agree with one straight line through the place: the intersection of their intervals. */
+function agreeing(series: Series, side: readonly number[], x_mm: number): number {
+  let low = Number.NEGATIVE_INFINITY;
+  let high = Number.POSITIVE_INFINITY;
+  let kept = 1;
+  const sums = noSums();
+  let used = 0;
+  for (const width of WIDTHS) {
+    while (used < Math.min(width, side.length)) {
+      const k = side[used++]!;
+      add(sums, series.at_mm[k]! - x_mm, series.values[k]!, series.u[k]!);
+    }
+    const { value, u } = lineAtZero(sums);
+    low = Math.max(low, value - AGREEMENT * u);
+    high = Math.min(high, value + AGREEMENT * u);
+    if (low > high) break;
+    kept = used;
+    if (used === side.length) break;
+  }
+  return kept;
+}
+
+/** Slices needed on each side before a parabola is drawn through them. */
+const CURVED_SIDE = 3;
+
+/**
+ * The value of a series at a place, from as much of its neighbourhood as lies on one smooth stretch with it.
+ *
+ * To each side the window grows while the straight lines fitted in ever wider windows agree (intersection of
+ * confidence intervals), so it reaches far where the joint runs evenly and stops before a step or a sharp bend; then
+ * one weighted parabola (near an end or a step: a straight line) is fitted over both sides. A single section that
+ * differs from both its sides keeps its own value. Nothing is carried across a blind stretch.
+ * @param nearest index of the measured slice nearest to the place
+ * Source: Goldenshluger and Nemirovski 1997; Katkovnik 1999 (local polynomial estimates, ICI rule).
+ */
+export function adaptiveLine(series: Series, nearest: number, x_mm: number, pitch_mm: number): Estimate {
+  const back = onSide(series, nearest, -1, pitch_mm);
+  const on = onSide(series, nearest, 1, pitch_mm);
+  const before = agreeing(series, back, series.at_mm[nearest]!);
+  const after = agreeing(series, on, series.at_mm[nearest]!);
+  const sums = noSums();
+  for (const k of [...back.slice(0, before), ...on.slice(1, after)])
+    add(sums, series.at_mm[k]! - x_mm, series.values[k]!, series.u[k]!);
+  const isCurved = Math.min(before, after) > CURVED_SIDE;
+  return (isCurved ? parabolaAtZero(sums) : null) ?? lineAtZero(sums);
+}

@@ -1,0 +1,75 @@
+import { medianOf } from "../fit/median.ts";
+import type { SliceOutcome } from "../section/measure-slice.ts";
+
+/** Slices with a seen edge needed to hold a plate's size against them. */
+const FEWEST_SEEN = 8;
+
+/** An edge is seen a little late or early where the laser line is cut by it, mm. Common practice, no source. */
+const EDGE_BIAS_MM = 0.05;
+
+/** A plate whose size differs by less than this is taken as the model has it, mm. */
+const SIZE_TRUSTED_MM = 0.15;
+
+/** The gap of each slice, unsmoothed, with where it comes from. */
+export interface GapSeries {
+  readonly values: Float64Array;
+  readonly u: Float64Array;
+  /** By how much the plate differs from the model, thicker positive, where the edge shows it plainly; else 0. mm. */
+  readonly size_departure_mm: number;
+}
+
+const of = (
+  outcomes: readonly SliceOutcome[],
+  pick: (one: Extract<SliceOutcome, { found: true }>["result"]) => number,
+) => Float64Array.from(outcomes, (one) => (one.found ? pick(one.result) : Number.NaN));
+
+/** How far the gap by the chain of sizes lies from the edge as seen, where many slices show it. */
+function departure(outcomes: readonly SliceOutcome[]): { readonly by_mm: number; readonly u_mm: number } {
+  const open: number[] = [];
+  const closed: number[] = [];
+  for (const one of outcomes) {
+    if (!one.found) continue;
+    const off = one.result.seen_gap_mm - one.result.at.gap_mm;
+    if (Number.isFinite(off)) (one.result.gap_is_open ? open : closed).push(off);
+  }
+  // Where the joint is closed the seen edge is an upper bound: it can only show that the chain says too much.
+  const seen = open.length >= FEWEST_SEEN ? open : closed.length >= FEWEST_SEEN ? closed : [];
+  if (seen.length === 0) return { by_mm: 0, u_mm: 0 };
+  const by_mm = medianOf(seen);
+  const spread_mm = 1.4826 * medianOf(seen.map((off) => Math.abs(off - by_mm)));
+  const u_mm = Math.hypot((1.25 * spread_mm) / Math.sqrt(seen.length), EDGE_BIAS_MM);
+  const shown = Math.abs(by_mm) > Math.max(SIZE_TRUSTED_MM, 3 * u_mm) && (seen === open || by_mm < 0);
+  return shown ? { by_mm, u_mm } : { by_mm: 0, u_mm: 0 };
+}
+
+/**
+ * The gap of a T, lap or corner joint. Where a plate's far corner is seen the gap is what its size leaves of the way
+ * from the root to that corner: far surer than an edge known only to the spacing of points. The size itself is held
+ * against the edge that the slices see, all together; where they contradict it, the plate as seen is taken. Where no
+ * corner is seen the edge serves; under a tack, then, nothing does.
+ */
+export function gapOfMeeting(outcomes: readonly SliceOutcome[]): GapSeries {
+  const chain = of(outcomes, (one) => one.at.gap_mm);
+  const found = outcomes.filter((one) => one.found).length;
+  const chained = chain.reduce((sum, value) => sum + (Number.isFinite(value) ? 1 : 0), 0);
+  if (chained < found / 2) {
+    const values = of(outcomes, (one) => (one.gap_is_open ? one.seen_gap_mm : one.seen_gap_mm / 2));
+    const u = of(outcomes, (one) => (one.gap_is_open ? one.u_seen_gap_mm : one.seen_gap_mm / Math.sqrt(12)));
+    return { values, u, size_departure_mm: 0 };
+  }
+  const { by_mm, u_mm } = departure(outcomes);
+  return {
+    values: chain.map((value) => value + by_mm),
+    u: of(outcomes, (one) => one.u.gap_mm),
+    size_departure_mm: u_mm > 0 ? -by_mm : 0,
+  };
+}
+
+/** The gap of a butt joint: the distance of its constructed root edges. */
+export function gapOfButt(outcomes: readonly SliceOutcome[]): GapSeries {
+  return {
+    values: of(outcomes, (one) => one.at.gap_mm),
+    u: of(outcomes, (one) => one.u.gap_mm),
+    size_departure_mm: 0,
+  };
+}

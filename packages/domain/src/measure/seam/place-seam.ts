@@ -1,0 +1,82 @@
+import { medianOf } from "../fit/median.ts";
+import type { JointFaces } from "../joints/joint-faces.ts";
+import { type Placed, placeSection, supportField } from "../section/place-section.ts";
+import type { Placement } from "../section/placement.ts";
+import type { Slices } from "./slices.ts";
+
+/** Places along the seam where the joint is looked for from nothing: one in 12 mm, within these bounds. */
+const APART_MM = 12;
+const FEWEST_PLACES = 5;
+const MOST_PLACES = 20;
+
+/** A place that explains less of the points than this is no find. */
+const LEAST_SUPPORT = 0.3;
+
+/** A find this far from the finds beside it is left out, mm. */
+const ODD_MM = 3;
+
+const FEWEST_POINTS = 24;
+
+/** Where the joint was found at one place along the seam. */
+interface Find extends Placed {
+  readonly at_mm: number;
+}
+
+function chosen(slices: Slices): number[] {
+  const usable = Array.from({ length: slices.count }, (_, i) => i).filter(
+    (i) => slices.starts[i + 1]! - slices.starts[i]! >= FEWEST_POINTS,
+  );
+  const length_mm = (slices.at_mm[slices.count - 1] ?? 0) - (slices.at_mm[0] ?? 0);
+  const count = Math.min(
+    usable.length,
+    Math.max(FEWEST_PLACES, Math.min(MOST_PLACES, Math.round(length_mm / APART_MM))),
+  );
+  return Array.from({ length: count }, (_, k) => usable[Math.floor(((k + 0.5) * usable.length) / count)]!);
+}
+
+/** Finds that agree with those beside them. */
+function agreed(finds: readonly Find[]): Find[] {
+  if (finds.length < 4) return [...finds];
+  return finds.filter((find, i) => {
+    const around = finds.slice(Math.max(0, i - 2), i + 3);
+    const l = medianOf(around.map((one) => one.l_mm));
+    const n = medianOf(around.map((one) => one.n_mm));
+    return Math.abs(find.l_mm - l) <= ODD_MM && Math.abs(find.n_mm - n) <= ODD_MM;
+  });
+}
+
+/**
+ * Where the joint lies along the whole seam, found at a few places and interpolated between them.
+ * @returns the placement expected at a place along the seam; null where the joint is found nowhere
+ */
+export function placeSeam(slices: Slices, joint: JointFaces): ((at_mm: number) => Placement) | null {
+  const field = supportField(joint);
+  const finds = chosen(slices)
+    .map((i): Find => {
+      const slice = {
+        l_mm: slices.l_mm,
+        n_mm: slices.n_mm,
+        from: slices.starts[i]!,
+        to: slices.starts[i + 1]!,
+      };
+      return { ...placeSection(slice, field), at_mm: slices.at_mm[i]! };
+    })
+    .filter((find) => find.support >= LEAST_SUPPORT);
+  const places = agreed(finds);
+  return places.length === 0 ? null : (at_mm) => between(places, at_mm);
+}
+
+function between(places: readonly Find[], at_mm: number): Placement {
+  let k = 0;
+  while (k < places.length - 2 && places[k + 1]!.at_mm < at_mm) k += 1;
+  const a = places[k]!;
+  const b = places[Math.min(k + 1, places.length - 1)]!;
+  const run = b.at_mm - a.at_mm;
+  const share = run > 0 ? Math.max(0, Math.min(1, (at_mm - a.at_mm) / run)) : 0;
+  const mix = (from: number, to: number) => from + share * (to - from);
+  return {
+    l_mm: mix(a.l_mm, b.l_mm),
+    n_mm: mix(a.n_mm, b.n_mm),
+    turn_rad: mix(a.turn_rad, b.turn_rad),
+  };
+}
