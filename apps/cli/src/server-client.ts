@@ -47,7 +47,8 @@ export async function asking<T>(work: () => Promise<T>): Promise<T> {
   } catch (error) {
     if (error instanceof ApiProblem) {
       const exit = isAboutCaller(error) ? EXIT.not_allowed : isPassing(error) ? EXIT.queued : EXIT.refused;
-      throw new CommandStop(failure(exit, refusalJson(error), refusalText(error)));
+      const talk = isAboutCaller(error) ? callerText(error) : refusalText(error);
+      throw new CommandStop(failure(exit, refusalJson(error), talk));
     }
     if (error instanceof Unreachable)
       throw new CommandStop(failure(EXIT.queued, { error: "unreachable", detail: error.message }));

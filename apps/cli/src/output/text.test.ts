@@ -72,7 +72,7 @@ describe("columns", () => {
     const rows = [["part", "a long title that runs on and on and on"]];
     expect(columnsText(["kind", "title"], rows, PLAIN)).toContain("on and on and on");
     const [, line] = columnsText(["kind", "title"], rows, { ...BRIGHT, colour: false }).split("\n");
-    expect(line).toBe("part  a long title that runs on and on a…");
+    expect(line).toBe("part  a long title that runs on and on …");
     expect(line?.length).toBe(40);
   });
 });
