@@ -1,5 +1,6 @@
 import { medianOf } from "../fit/median.ts";
 import type { SliceOutcome } from "../section/measure-slice.ts";
+import { expectedFromNeighbours } from "./odd-slices.ts";
 
 /** Slices with a seen edge needed to hold a plate's size against them. */
 const FEWEST_SEEN = 8;
@@ -29,8 +30,10 @@ function departure(outcomes: readonly SliceOutcome[]): { readonly by_mm: number;
   const closed: number[] = [];
   for (const one of outcomes) {
     if (!one.found) continue;
-    const off = one.result.seen_gap_mm - one.result.at.gap_mm;
-    if (Number.isFinite(off)) (one.result.gap_is_open ? open : closed).push(off);
+    const { seen_gap, at } = one.result;
+    if (!seen_gap || !Number.isFinite(at.gap_mm)) continue;
+    if (seen_gap.is_open) open.push(seen_gap.gap_mm - at.gap_mm);
+    else closed.push(seen_gap.begins_mm - at.gap_mm);
   }
   // Where the joint is closed the seen edge is an upper bound: it can only show that the chain says too much.
   const seen = open.length >= FEWEST_SEEN ? open : closed.length >= FEWEST_SEEN ? closed : [];
@@ -43,6 +46,25 @@ function departure(outcomes: readonly SliceOutcome[]): { readonly by_mm: number;
 }
 
 /**
+ * The gap by the edge alone. Where a joint shows no opening, its gap lies anywhere from nothing to where the points
+ * begin. A lost return or a ball of spatter at the root makes an edge seem late, never early: a section that shows
+ * much more than those on both its sides shows that, not the gap.
+ */
+function seenSeries(outcomes: readonly SliceOutcome[]): GapSeries {
+  const values = of(outcomes, (one) => one.seen_gap?.gap_mm ?? Number.NaN);
+  const u = of(outcomes, (one) => one.seen_gap?.u_mm ?? Number.NaN);
+  const late = Array.from(values.keys()).filter((i) => {
+    const expected = expectedFromNeighbours(values, u, i, LATE_U);
+    return expected?.odd && values[i]! > expected.value;
+  });
+  for (const i of late) values[i] = Number.NaN;
+  return { values, u, size_departure_mm: 0 };
+}
+
+/** An edge this many standard uncertainties later than those beside it is not the gap's. */
+const LATE_U = 3;
+
+/**
  * The gap of a T, lap or corner joint. Where a plate's far corner is seen the gap is what its size leaves of the way
  * from the root to that corner: far surer than an edge known only to the spacing of points. The size itself is held
  * against the edge that the slices see, all together; where they contradict it, the plate as seen is taken. Where no
@@ -53,9 +75,7 @@ export function gapOfMeeting(outcomes: readonly SliceOutcome[]): GapSeries {
   const found = outcomes.filter((one) => one.found).length;
   const chained = chain.reduce((sum, value) => sum + (Number.isFinite(value) ? 1 : 0), 0);
   if (chained < found / 2) {
-    const values = of(outcomes, (one) => (one.gap_is_open ? one.seen_gap_mm : one.seen_gap_mm / 2));
-    const u = of(outcomes, (one) => (one.gap_is_open ? one.u_seen_gap_mm : one.seen_gap_mm / Math.sqrt(12)));
-    return { values, u, size_departure_mm: 0 };
+    return seenSeries(outcomes);
   }
   const { by_mm, u_mm } = departure(outcomes);
   return {

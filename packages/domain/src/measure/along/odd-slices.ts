@@ -18,12 +18,14 @@ export interface Expected {
  * since one of its sides agrees.
  * @param values one a slice, NaN where not found
  * @param u their standard uncertainties
+ * @param odd_u how many of them make a value odd
  * @returns the middle of the neighbours on both sides; null where there are fewer than two on a side
  */
 export function expectedFromNeighbours(
   values: Float64Array,
   u: Float64Array,
   index: number,
+  odd_u = ODD_U,
 ): Expected | null {
   const side = (way: -1 | 1) => {
     const found: number[] = [];
@@ -35,7 +37,7 @@ export function expectedFromNeighbours(
   const after = side(1);
   if (before.length < 2 || after.length < 2) return null;
   const value = (medianOf(before) + medianOf(after)) / 2;
-  const limit = Math.max(ODD_MM, ODD_U * u[index]!);
+  const limit = Math.max(ODD_MM, odd_u * u[index]!);
   const away = (from: number) => Math.abs(values[index]! - from);
   const odd = Math.min(away(medianOf(before)), away(medianOf(after)), away(value)) > limit;
   return { value, odd };

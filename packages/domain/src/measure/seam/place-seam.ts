@@ -1,13 +1,13 @@
 import { medianOf } from "../fit/median.ts";
 import type { JointFaces } from "../joints/joint-faces.ts";
-import { type Placed, placeSection, supportField } from "../section/place-section.ts";
+import { type Placed, placeSection, supportFields } from "../section/place-section.ts";
 import type { Placement } from "../section/placement.ts";
 import type { Slices } from "./slices.ts";
 
-/** Places along the seam where the joint is looked for from nothing: one in 12 mm, within these bounds. */
-const APART_MM = 12;
+/** Places along the seam where the joint is looked for from nothing: one in 25 mm, within these bounds. */
+const APART_MM = 25;
 const FEWEST_PLACES = 5;
-const MOST_PLACES = 20;
+const MOST_PLACES = 12;
 
 /** A place that explains less of the points than this is no find. */
 const LEAST_SUPPORT = 0.3;
@@ -50,7 +50,7 @@ function agreed(finds: readonly Find[]): Find[] {
  * @returns the placement expected at a place along the seam; null where the joint is found nowhere
  */
 export function placeSeam(slices: Slices, joint: JointFaces): ((at_mm: number) => Placement) | null {
-  const field = supportField(joint);
+  const fields = supportFields(joint);
   const finds = chosen(slices)
     .map((i): Find => {
       const slice = {
@@ -59,7 +59,7 @@ export function placeSeam(slices: Slices, joint: JointFaces): ((at_mm: number) =
         from: slices.starts[i]!,
         to: slices.starts[i + 1]!,
       };
-      return { ...placeSection(slice, field), at_mm: slices.at_mm[i]! };
+      return { ...placeSection(slice, fields), at_mm: slices.at_mm[i]! };
     })
     .filter((find) => find.support >= LEAST_SUPPORT);
   const places = agreed(finds);

@@ -1,10 +1,10 @@
 import type { BLIND_REASONS } from "../../schemas/scan-result.ts";
-import type { FittedLine } from "../fit/line-fit.ts";
 import type { JointAt } from "../joints/construct-root.ts";
 import type { JointFaces } from "../joints/joint-faces.ts";
 import { constructWithU, type JointWithU } from "../joints/joint-uncertainty.ts";
 import { FEWEST_POINTS, faceEnd, type SectionSlice } from "./face-fit.ts";
-import { meetingAlong, refit, type SectionFit } from "./fit-section.ts";
+import { refit, type SectionFit } from "./fit-section.ts";
+import { bandOf, type SeenGap, seenGap } from "./seen-gap.ts";
 import { type TackReach, tackOver } from "./tack.ts";
 
 export type BlindReason = (typeof BLIND_REASONS)[number];
@@ -12,28 +12,19 @@ export type BlindReason = (typeof BLIND_REASONS)[number];
 /** A root that is less sure than this is no measurement, mm. */
 const LEAST_SURE_MM = 0.5;
 
-/** Points within this many spreads of a face, and at least this near, are the face's when its end is looked for. */
-const END_SPREADS = 4;
-const END_BAND_MM = 0.12;
-
 /** One section, measured by itself. */
 export interface SliceResult {
   readonly fits: SectionFit;
   readonly at: JointAt;
   readonly u: JointAt;
-  /** Gap from the edge as it is seen, mm, and its uncertainty; NaN where no edge is seen. */
-  readonly seen_gap_mm: number;
-  readonly u_seen_gap_mm: number;
-  /** Whether a gap is plainly seen: the face begins clear of the other one. If not, the seen gap is an upper bound. */
-  readonly gap_is_open: boolean;
+  /** The gap as its edge is seen; null where it is covered or no edge is found. */
+  readonly seen_gap: SeenGap | null;
   readonly tack: boolean;
 }
 
 export type SliceOutcome =
   | { readonly found: true; readonly result: SliceResult }
   | { readonly found: false; readonly why: BlindReason };
-
-const bandOf = (fit: FittedLine) => Math.max(END_BAND_MM, END_SPREADS * fit.scale_mm);
 
 /** Ends of surfaces that are seen as edges only; the light's next point may lie anywhere in one spacing beyond. */
 function edgesOf(slice: SectionSlice, joint: JointFaces, fits: SectionFit) {
@@ -50,28 +41,6 @@ function edgesOf(slice: SectionSlice, joint: JointFaces, fits: SectionFit) {
     u_edges[side] = end.spacing_mm / Math.sqrt(12);
   }
   return { edges, u_edges };
-}
-
-/** The gap of a meeting joint from where the points of the face above it begin. */
-function seenGap(slice: SectionSlice, joint: JointFaces, fits: SectionFit, tack: boolean) {
-  const none = { gap_mm: Number.NaN, u_mm: Number.NaN, is_open: false };
-  if (joint.kind !== "meeting" || tack) return none;
-  const side = joint.chain?.plate === "a" ? 0 : 1;
-  const [index, other] = [joint.root[side], joint.root[1 - side]!];
-  const [face, fit, otherFace, otherFit] = [joint.faces[index], fits[index], joint.faces[other], fits[other]];
-  if (!face || !fit || !otherFace || !otherFit) return none;
-  const root = meetingAlong(face, fit, otherFace, otherFit);
-  if (root === null) return none;
-  // Points this near to the other face may be its own.
-  const clear_mm = bandOf(otherFit);
-  const end = faceEnd(slice, face, fit, { band_mm: bandOf(fit), from_mm: root + clear_mm });
-  if (!end) return none;
-  const begins_mm = end.t_mm - root;
-  return {
-    gap_mm: begins_mm - end.spacing_mm / 2,
-    u_mm: end.spacing_mm / Math.sqrt(12),
-    is_open: begins_mm > clear_mm + 1.5 * end.spacing_mm,
-  };
 }
 
 function whyNot(slice: SectionSlice, joint: JointFaces, fits: SectionFit): BlindReason {
@@ -111,16 +80,6 @@ export function measureSlice(slice: SectionSlice, joint: JointFaces, fitted: Sec
   const { fits, built } = (tack && besideTack(slice, joint, fitted, tack)) ?? { fits: fitted, built: first };
   if (Math.hypot(built.u.lateral_mm, built.u.normal_mm) > LEAST_SURE_MM)
     return { found: false, why: "root_not_seen" };
-  const seen = seenGap(slice, joint, fits, tack !== null);
-  return {
-    found: true,
-    result: {
-      fits,
-      ...built,
-      seen_gap_mm: seen.gap_mm,
-      u_seen_gap_mm: seen.u_mm,
-      gap_is_open: seen.is_open,
-      tack: tack !== null,
-    },
-  };
+  const seen_gap = tack ? null : seenGap(slice, joint, fits);
+  return { found: true, result: { fits, ...built, seen_gap, tack: tack !== null } };
 }

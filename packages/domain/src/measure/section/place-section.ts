@@ -4,11 +4,12 @@ import type { Placement } from "./placement.ts";
 
 /** How far the real joint is looked for from the nominal one, mm. */
 export const SEARCH_MM = 16;
-const STEP_MM = 0.8;
+const STEP_MM = 1.6;
 const TURNS_RAD = [0, -3, 3, -6, 6].map((deg) => (deg * Math.PI) / 180);
 
-/** A point this far from every face speaks for none, mm. Wide enough for the search's steps and a plate out of line. */
-const TOLERANCE_MM = 1.2;
+/** A point this far from every face speaks for none, mm: wide for the first search's steps, then near. */
+const WIDE_MM = 2.4;
+const NEAR_MM = 1.2;
 
 /** The field of distances to the nominal faces. */
 const HALF_FIELD_MM = 48;
@@ -21,8 +22,14 @@ const ASKED = 64;
 /** Of places that explain the points alike, the nearest to the model is taken. */
 const NEARER = 4e-4;
 
-/** Support of a point by how far it is from the nominal joint: 1 on a face, 0 beyond the tolerance. */
-export type SupportField = Float32Array;
+/** Support of a point by how far it is from the nominal joint: 1 on a face, 0 beyond a tolerance. */
+type Field = Float32Array;
+
+/** The fields of a joint, made once for a scan. */
+export interface SupportFields {
+  readonly wide: Field;
+  readonly near: Field;
+}
 
 /** Rows of the drawing as segments. */
 function segmentsOf(joint: JointFaces): number[][] {
@@ -39,20 +46,25 @@ function squareToSegment(l: number, n: number, [l0 = 0, n0 = 0, l1 = 0, n1 = 0]:
   return (l - l0 - share * dl) ** 2 + (n - n0 - share * dn) ** 2;
 }
 
-/** The support field of a joint, made once for a scan. Only cells near a face are written. */
-export function supportField(joint: JointFaces): SupportField {
+/** The support fields of a joint. */
+export function supportFields(joint: JointFaces): SupportFields {
+  return { wide: fieldOf(joint, WIDE_MM), near: fieldOf(joint, NEAR_MM) };
+}
+
+/** Only cells near a face are written. */
+function fieldOf(joint: JointFaces, tolerance_mm: number): Field {
   const field = new Float32Array(CELLS * CELLS);
   const cell = (mm: number) => Math.floor((mm + HALF_FIELD_MM) / CELL_MM);
   const clamp = (i: number) => Math.max(0, Math.min(CELLS - 1, i));
   for (const segment of segmentsOf(joint)) {
     const [l0 = 0, n0 = 0, l1 = 0, n1 = 0] = segment;
-    const [left, right] = [Math.min(l0, l1) - TOLERANCE_MM, Math.max(l0, l1) + TOLERANCE_MM];
-    const [low, high] = [Math.min(n0, n1) - TOLERANCE_MM, Math.max(n0, n1) + TOLERANCE_MM];
+    const [left, right] = [Math.min(l0, l1) - tolerance_mm, Math.max(l0, l1) + tolerance_mm];
+    const [low, high] = [Math.min(n0, n1) - tolerance_mm, Math.max(n0, n1) + tolerance_mm];
     for (let i = clamp(cell(low)); i <= clamp(cell(high)); i++) {
       const n = (i + 0.5) * CELL_MM - HALF_FIELD_MM;
       for (let j = clamp(cell(left)); j <= clamp(cell(right)); j++) {
         const l = (j + 0.5) * CELL_MM - HALF_FIELD_MM;
-        const support = 1 - squareToSegment(l, n, segment) / (TOLERANCE_MM * TOLERANCE_MM);
+        const support = 1 - squareToSegment(l, n, segment) / (tolerance_mm * tolerance_mm);
         const at = i * CELLS + j;
         if (support > field[at]!) field[at] = support;
       }
@@ -67,7 +79,7 @@ interface Asked {
   readonly count: number;
 }
 
-function supportAt(field: SupportField, asked: Asked, l_mm: number, n_mm: number): number {
+function supportAt(field: Field, asked: Asked, l_mm: number, n_mm: number): number {
   let sum = 0;
   for (let k = 0; k < asked.count; k++) {
     const j = Math.floor((asked.l[k]! - l_mm + HALF_FIELD_MM) / CELL_MM);
@@ -101,21 +113,23 @@ export interface Placed extends Placement {
  * Finds where the joint lies in a section by trying the nominal faces on a grid of places and turns, then halving
  * the step. Returns the place with the most support; its accuracy is a few tenths of a millimetre.
  */
-export function placeSection(slice: SectionSlice, field: SupportField): Placed {
+export function placeSection(slice: SectionSlice, fields: SupportFields): Placed {
   let best: Placed = { l_mm: 0, n_mm: 0, turn_rad: 0, support: Number.NEGATIVE_INFINITY };
   const reach = Math.round(SEARCH_MM / STEP_MM);
   for (const turn_rad of TURNS_RAD) {
     const points = asked(slice, turn_rad);
     let here = { l: 0, n: 0, support: Number.NEGATIVE_INFINITY };
-    const attempt = (l: number, n: number) => {
+    const attempt = (field: Field, l: number, n: number) => {
       const support = supportAt(field, points, l, n);
       if (support > here.support) here = { l, n, support };
     };
     for (let i = -reach; i <= reach; i++)
-      for (let j = -reach; j <= reach; j++) attempt(j * STEP_MM, i * STEP_MM);
+      for (let j = -reach; j <= reach; j++) attempt(fields.wide, j * STEP_MM, i * STEP_MM);
+    here = { ...here, support: supportAt(fields.near, points, here.l, here.n) };
     for (let step = STEP_MM / 2; step > 0.1; step /= 2) {
       const { l, n } = here;
-      for (const dl of [-step, 0, step]) for (const dn of [-step, 0, step]) attempt(l + dl, n + dn);
+      for (const dl of [-step, 0, step])
+        for (const dn of [-step, 0, step]) attempt(fields.near, l + dl, n + dn);
     }
     if (here.support > best.support + 1e-9) best = placedBack(here, turn_rad);
   }

@@ -8,7 +8,7 @@ const OFF_FACES_MM = 0.35;
 const NEAR_ROOT_MM = 6;
 
 /** Ghosts and spatter are a few points; a tack is a surface. */
-const FEWEST_POINTS = 8;
+const FEWEST_POINTS = 5;
 
 /** How far a tack's metal reaches along each plate's root face, mm from that face's root end. */
 export type TackReach = readonly [a_mm: number, b_mm: number];
