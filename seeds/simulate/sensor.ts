@@ -22,7 +22,7 @@ const set = (points: number, field_of_view_mm: number, view_deg: number): Sensor
 /** Each joint is looked at from the side where both of its faces are seen. */
 export const SENSORS: Readonly<Record<ShopJoint, Sensor>> = {
   fillet_t: set(96, 30, 40),
-  lap: set(96, 28, 36),
+  lap: set(144, 28, 36),
   butt_v: set(110, 32, 0),
   corner_open: set(104, 30, -45),
 };
