@@ -15,8 +15,9 @@ import { addPiece, createPart } from "../parts/parts.service.ts";
 import { recordPass } from "../passes/passes.service.ts";
 import { addQualification, createPerson } from "../people/people.service.ts";
 import { createProcedure, patchProcedure, readProcedure } from "../procedures/procedures.service.ts";
-import { recordScan } from "../scans/scans.service.ts";
+import { evaluationOf, type PushedScan, recordScan } from "../scans/scans.service.ts";
 import { createKey, createUser } from "../users/users.service.ts";
+import { lookingAhead, measuringAhead } from "./measuring-ahead.ts";
 import { type References, references } from "./references.ts";
 
 /** Demo passwords are published, so their hashes need not be slow. */
@@ -31,6 +32,24 @@ interface Replay {
 async function keep(deps: Deps, file: DemoFile, media_type: string): Promise<ReceivedFile> {
   const kept = await deps.store.keep(Readable.from([Buffer.from(file.bytes)]));
   return { ...kept, name: file.name, media_type };
+}
+
+async function pushedScan(
+  { seam, cell, fields, file }: Extract<DemoEvent, { kind: "scan" }>,
+  deps: Deps,
+  refs: References,
+): Promise<PushedScan> {
+  return {
+    seam_tag: await refs.seamTag(seam),
+    fields: {
+      ...fields,
+      stage: fields.stage ?? "fitup",
+      units: fields.units ?? "mm",
+      cell_tag: refs.tag(cell),
+    },
+    scan: await keep(deps, file, "application/octet-stream"),
+    poses: null,
+  };
 }
 
 type Events<Kind extends DemoEvent["kind"]> = Extract<DemoEvent, { kind: Kind }>;
@@ -83,18 +102,8 @@ const REPLAY: { [Kind in DemoEvent["kind"]]: (event: Events<Kind>, replay: Repla
     addPiece(context, refs.tag(part), { ...fields, lot_tag: refs.tag(lot) }),
   mount: ({ cell, lot, fields }, { refs, context }) =>
     mountLot(context, { ...fields, cell_tag: refs.tag(cell), lot_tag: refs.tag(lot) }),
-  scan: async ({ seam, cell, fields, file }, { deps, refs, context }) =>
-    recordScan(deps, context, {
-      seam_tag: await refs.seamTag(seam),
-      fields: {
-        ...fields,
-        stage: fields.stage ?? "fitup",
-        units: fields.units ?? "mm",
-        cell_tag: refs.tag(cell),
-      },
-      scan: await keep(deps, file, "application/octet-stream"),
-      poses: null,
-    }),
+  scan: async (event, { deps, refs, context }) =>
+    recordScan(deps, context, await pushedScan(event, deps, refs)),
   pass: async ({ seam, cell, operator, fields, file }, { deps, refs, context }) =>
     recordPass(deps, context, {
       seam_tag: await refs.seamTag(seam),
@@ -130,13 +139,19 @@ export async function loadDemo(
   },
 ): Promise<DemoLoaded> {
   let at = options.ends_at;
-  const deps: Deps = { ...base, now: () => new Date(at) };
+  const ahead = measuringAhead(base.measure);
+  const deps: Deps = { ...base, measure: ahead.pool, now: () => new Date(at) };
   const refs = references(deps.db.reader, SETUP_ACTOR);
   const hash = createHash("sha256");
   let events = 0;
   await deps.db.writer.raw("pragma synchronous = off");
   try {
-    for (const event of demoEvents({ seed: options.seed, ends_at: options.ends_at })) {
+    const begin = async (event: DemoEvent) => {
+      if (event.kind !== "scan" || !refs.has(event.seam.part) || !refs.has(event.cell)) return;
+      const pushed = await pushedScan(event, deps, refs);
+      ahead.begin((await evaluationOf(deps, await refs.caller(event.by), pushed)).task);
+    };
+    for await (const event of lookingAhead(demoEvents({ ...options }), begin)) {
       at = event.at;
       const context = {
         writer: deps.db.writer,

@@ -6,6 +6,7 @@ import { type Caller, systemCaller } from "../auth/caller.ts";
 /** What the scenario's names stand for in the database. */
 export interface References {
   put(ref: Ref, made: { readonly id: string; readonly tag?: string }): void;
+  has(ref: Ref): boolean;
   id(ref: Ref): string;
   tag(ref: Ref): string;
   seamTag(seam: SeamRef): Promise<string>;
@@ -45,6 +46,7 @@ export function references(reader: Knex, setupActor: string): References {
 
   return {
     put: (ref, thing) => made.set(ref, thing),
+    has: (ref) => made.has(ref),
     id: (ref) => known(ref).id,
     tag: (ref) => {
       const { tag } = known(ref);

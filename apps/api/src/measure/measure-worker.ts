@@ -1,11 +1,13 @@
 import { readFile } from "node:fs/promises";
 import { parentPort } from "node:worker_threads";
 import { gunzipSync } from "node:zlib";
-import type { Outcome } from "@beadroll/domain/faults/fault";
+import { good, type Outcome } from "@beadroll/domain/faults/fault";
 import { evaluateScan } from "@beadroll/domain/measure/evaluate";
 import { readScan } from "@beadroll/domain/measure/read/read-scan";
 import type { ScanCloud } from "@beadroll/domain/measure/scan-cloud";
+import { type MeasuredSeam, measureSeam } from "@beadroll/domain/measure/seam/measure-seam";
 import { sectionAt } from "@beadroll/domain/measure/section-at";
+import type { SeamModel } from "@beadroll/domain/schemas/seam-model";
 import { readPassLog } from "@beadroll/domain/weld/read-pass-log";
 import { reducePass } from "@beadroll/domain/weld/reduce-pass";
 import type { MeasureTask, ScanFiles } from "./measure-task.ts";
@@ -36,6 +38,18 @@ async function read(files: ScanFiles): Promise<Outcome<ScanCloud>> {
   return outcome;
 }
 
+/** The seam last measured in each cloud, so that a cursor moved along it measures once. */
+const seams = new WeakMap<ScanCloud, { readonly model: string; readonly seam: MeasuredSeam }>();
+
+function seamIn(cloud: ScanCloud, model: SeamModel): MeasuredSeam {
+  const key = JSON.stringify(model);
+  const kept = seams.get(cloud);
+  if (kept?.model === key) return kept.seam;
+  const seam = measureSeam(model, cloud);
+  seams.set(cloud, { model: key, seam });
+  return seam;
+}
+
 async function reduce(task: Extract<MeasureTask, { kind: "pass" }>): Promise<Outcome<unknown>> {
   const log = readPassLog({ name: task.log.name, bytes: await readFile(task.log.path) });
   if (!log.ok) return log;
@@ -47,7 +61,7 @@ async function work(task: MeasureTask): Promise<Outcome<unknown>> {
   if (task.kind === "pass") return reduce(task);
   const cloud = await read(task.files);
   if (!cloud.ok) return cloud;
-  if (task.kind === "section") return sectionAt(task.model, cloud.value, task.station_mm);
+  if (task.kind === "section") return good(sectionAt(seamIn(cloud.value, task.model), task.station_mm));
   const accuracy = task.scanner_accuracy_mm;
   return evaluateScan(task.model, cloud.value, accuracy === null ? {} : { scanner_accuracy_mm: accuracy });
 }

@@ -4,7 +4,7 @@ import type { ScanCreate, ScanPage } from "@beadroll/domain/schemas/scan";
 import type { ScanResult } from "@beadroll/domain/schemas/scan-result";
 import { resolveLimits, type SeamModel } from "@beadroll/domain/schemas/seam-model";
 import type { SectionView } from "@beadroll/domain/schemas/section-view";
-import { actorName } from "../auth/caller.ts";
+import { actorName, type Caller } from "../auth/caller.ts";
 import { cellOf } from "../cells/cells.service.ts";
 import type { Deps } from "../deps.ts";
 import { readSeamModel } from "../drawings/drawings.read.ts";
@@ -12,7 +12,7 @@ import { recordFile } from "../files/files.store.ts";
 import type { ReceivedFile } from "../http/multipart.ts";
 import { accepted } from "../http/refusal.ts";
 import { type ChangeContext, type ChangeTrx, change, type Row } from "../ledger/change.ts";
-import type { ScanFiles } from "../measure/measure-task.ts";
+import type { MeasureTask, ScanFiles } from "../measure/measure-task.ts";
 import { attemptFor, readSeamHandle, refuseOtherPart, type SeamHandle } from "../seams/seam-lookup.ts";
 import { deriveSeam } from "../seams/seam-state.store.ts";
 import { readScanPage, readScanSource } from "./scans.read.ts";
@@ -46,23 +46,30 @@ async function scannerAccuracy(deps: Deps, cellId: string | null): Promise<numbe
   return cell?.scanner_accuracy_mm ?? null;
 }
 
-/** Measures before the transaction begins, which must be short. */
-async function measure(
+type EvaluateTask = Extract<MeasureTask, { kind: "evaluate" }>;
+
+/** What a worker needs to measure a pushed scan: its files, its seam's model, its cell's scanner. */
+export async function evaluationOf(
   deps: Deps,
-  context: ChangeContext,
+  caller: Caller,
   pushed: PushedScan,
-  seam: SeamHandle,
-): Promise<Measured> {
+): Promise<{ readonly task: EvaluateTask; readonly cell_id: string | null }> {
   const { reader } = deps.db;
-  const cell_id = await cellOf(reader, context.caller, pushed.fields.cell_tag);
-  const model = await readSeamModel(reader, seam.model_seam_id);
-  const outcome = await deps.measure.run({
+  const seam = await readSeamHandle(reader, pushed.seam_tag);
+  const cell_id = await cellOf(reader, caller, pushed.fields.cell_tag);
+  const task: EvaluateTask = {
     kind: "evaluate",
     files: filesOf(deps, pushed),
-    model,
+    model: await readSeamModel(reader, seam.model_seam_id),
     scanner_accuracy_mm: await scannerAccuracy(deps, cell_id),
-  });
-  return { result: accepted(outcome), model, cell_id };
+  };
+  return { task, cell_id };
+}
+
+/** Measures before the transaction begins, which must be short. */
+async function measure(deps: Deps, context: ChangeContext, pushed: PushedScan): Promise<Measured> {
+  const { task, cell_id } = await evaluationOf(deps, context.caller, pushed);
+  return { result: accepted(await deps.measure.run(task)), model: task.model, cell_id };
 }
 
 /** What lists show of a seam's latest fit-up scan. */
@@ -134,7 +141,7 @@ export async function recordScan(deps: Deps, context: ChangeContext, pushed: Pus
   refuseOtherPart(seam, pushed.fields.part_tag);
   const earlier = await sameScan(reader, seam, pushed);
   if (earlier) return readScanPage(reader, earlier);
-  const measured = await measure(deps, context, pushed, seam);
+  const measured = await measure(deps, context, pushed);
   return change(context, "scan.record", async (trx) => {
     // Read again: another push may have come between.
     const now = await readSeamHandle(trx.read, seam.tag);

@@ -1,11 +1,8 @@
-import { good, type Outcome } from "../faults/fault.ts";
-import type { SeamModel } from "../schemas/seam-model.ts";
 import type { SectionView } from "../schemas/section-view.ts";
 import type { FittedLine } from "./fit/line-fit.ts";
 import type { Face, JointFaces } from "./joints/joint-faces.ts";
 import { BLIND_WORDS } from "./judge/coverage-reasons.ts";
-import type { ScanCloud } from "./scan-cloud.ts";
-import { type MeasuredSeam, measureSeam } from "./seam/measure-seam.ts";
+import type { MeasuredSeam } from "./seam/measure-seam.ts";
 import { sliceAt } from "./seam/measure-slices.ts";
 import type { SectionSlice } from "./section/face-fit.ts";
 import type { SliceResult } from "./section/measure-slice.ts";
@@ -102,10 +99,10 @@ function nearest(seam: MeasuredSeam, station_mm: number): number {
 
 /**
  * The cross-section nearest to a station: its points, kept or rejected with why, the fitted faces and the root.
- * Fitted by itself and with its neighbours' help as {@link evaluateScan} does, not smoothed along the seam.
+ * Fitted by itself and with its neighbours' help as the evaluation does, not smoothed along the seam.
+ * @param seam from {@link measureSeam}; measured once, it serves every station
  */
-export function sectionAt(model: SeamModel, cloud: ScanCloud, station_mm: number): Outcome<SectionView> {
-  const seam = measureSeam(model, cloud);
+export function sectionAt(seam: MeasuredSeam, station_mm: number): SectionView {
   const { profile } = seam.joint;
   const outline = [profile.plate_a, profile.plate_b].map((line) => line.map(([l, n]): Point => [l, n]));
   const index = nearest(seam, station_mm);
@@ -113,7 +110,7 @@ export function sectionAt(model: SeamModel, cloud: ScanCloud, station_mm: number
   const result = outcome?.found ? outcome.result : null;
   const points =
     index < 0 ? { kept: [], rejected: [] } : sorted(sliceAt(seam.slices, index), seam.joint, result);
-  return good({
+  return {
     station_mm: index < 0 ? station_mm : Math.round(seam.slices.at_mm[index]! * 1e3) / 1e3,
     measured: result !== null,
     why: outcome?.found ? null : BLIND_WORDS[outcome?.why ?? "no_points"],
@@ -121,5 +118,5 @@ export function sectionAt(model: SeamModel, cloud: ScanCloud, station_mm: number
     plates: result ? plates(seam.joint, result) : [],
     root: result ? [result.at.lateral_mm, result.at.normal_mm] : null,
     model: outline,
-  });
+  };
 }

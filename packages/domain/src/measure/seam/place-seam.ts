@@ -51,17 +51,17 @@ function agreed(finds: readonly Find[]): Find[] {
  */
 export function placeSeam(slices: Slices, joint: JointFaces): ((at_mm: number) => Placement) | null {
   const fields = supportFields(joint);
-  const finds = chosen(slices)
-    .map((i): Find => {
-      const slice = {
-        l_mm: slices.l_mm,
-        n_mm: slices.n_mm,
-        from: slices.starts[i]!,
-        to: slices.starts[i + 1]!,
-      };
-      return { ...placeSection(slice, fields), at_mm: slices.at_mm[i]! };
-    })
-    .filter((find) => find.support >= LEAST_SUPPORT);
+  const finds: Find[] = [];
+  for (const i of chosen(slices)) {
+    const slice = {
+      l_mm: slices.l_mm,
+      n_mm: slices.n_mm,
+      from: slices.starts[i]!,
+      to: slices.starts[i + 1]!,
+    };
+    const find = { ...placeSection(slice, fields, finds.at(-1) ?? null), at_mm: slices.at_mm[i]! };
+    if (find.support >= LEAST_SUPPORT) finds.push(find);
+  }
   const places = agreed(finds);
   return places.length === 0 ? null : (at_mm) => between(places, at_mm);
 }
