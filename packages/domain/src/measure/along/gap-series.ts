@@ -9,12 +9,14 @@ const FEWEST_SEEN = 8;
 const EDGE_BIAS_MM = 0.05;
 
 /** A plate whose size differs by less than this is taken as the model has it, mm. */
-const SIZE_TRUSTED_MM = 0.15;
+const SIZE_TRUSTED_MM = 0.3;
 
 /** The gap of each slice, unsmoothed, with where it comes from. */
 export interface GapSeries {
   readonly values: Float64Array;
   readonly u: Float64Array;
+  /** What does not average out along the seam: an edge is known to the spacing of the points however many show it. */
+  readonly floor_u: Float64Array | null;
   /** By how much the plate differs from the model, thicker positive, where the edge shows it plainly; else 0. mm. */
   readonly size_departure_mm: number;
 }
@@ -36,12 +38,13 @@ function departure(outcomes: readonly SliceOutcome[]): { readonly by_mm: number;
     else closed.push(seen_gap.begins_mm - at.gap_mm);
   }
   // Where the joint is closed the seen edge is an upper bound: it can only show that the chain says too much.
-  const seen = open.length >= FEWEST_SEEN ? open : closed.length >= FEWEST_SEEN ? closed : [];
-  if (seen.length === 0) return { by_mm: 0, u_mm: 0 };
+  const isOpen = open.length > closed.length;
+  const seen = isOpen ? open : [...open, ...closed];
+  if (seen.length < FEWEST_SEEN) return { by_mm: 0, u_mm: 0 };
   const by_mm = medianOf(seen);
   const spread_mm = 1.4826 * medianOf(seen.map((off) => Math.abs(off - by_mm)));
   const u_mm = Math.hypot((1.25 * spread_mm) / Math.sqrt(seen.length), EDGE_BIAS_MM);
-  const shown = Math.abs(by_mm) > Math.max(SIZE_TRUSTED_MM, 3 * u_mm) && (seen === open || by_mm < 0);
+  const shown = Math.abs(by_mm) > Math.max(SIZE_TRUSTED_MM, 3 * u_mm) && (isOpen || by_mm < 0);
   return shown ? { by_mm, u_mm } : { by_mm: 0, u_mm: 0 };
 }
 
@@ -58,7 +61,10 @@ function seenSeries(outcomes: readonly SliceOutcome[]): GapSeries {
     return expected?.odd && values[i]! > expected.value;
   });
   for (const i of late) values[i] = Number.NaN;
-  return { values, u, size_departure_mm: 0 };
+  const floor_u = of(outcomes, (one) =>
+    Math.hypot(EDGE_BIAS_MM, one.seen_gap?.is_open ? 0 : (one.seen_gap?.u_mm ?? 0)),
+  );
+  return { values, u, floor_u, size_departure_mm: 0 };
 }
 
 /** An edge this many standard uncertainties later than those beside it is not the gap's. */
@@ -81,6 +87,7 @@ export function gapOfMeeting(outcomes: readonly SliceOutcome[]): GapSeries {
   return {
     values: chain.map((value) => value + by_mm),
     u: of(outcomes, (one) => one.u.gap_mm),
+    floor_u: null,
     size_departure_mm: u_mm > 0 ? -by_mm : 0,
   };
 }
@@ -90,6 +97,7 @@ export function gapOfButt(outcomes: readonly SliceOutcome[]): GapSeries {
   return {
     values: of(outcomes, (one) => one.at.gap_mm),
     u: of(outcomes, (one) => one.u.gap_mm),
+    floor_u: null,
     size_departure_mm: 0,
   };
 }

@@ -22,13 +22,23 @@ const KEYS = {
   turn_b: "turn_b_rad",
 } as const;
 
+/** An edge is seen a little late or early where the laser line is cut by it, mm. Common practice, no source. */
+const EDGE_BIAS_MM = 0.05;
+
+/** The part of an edge's uncertainty that all slices share: it goes half into the root and whole into the gap. */
+function edgeFloor({ joint, slices }: MeasuredSeam, share: number): Float64Array | null {
+  const edges = joint.kind === "butt" ? joint.form.filter((form) => form === "edge").length : 0;
+  return edges === 0 ? null : new Float64Array(slices.count).fill(share * EDGE_BIAS_MM * Math.sqrt(edges));
+}
+
 const withScatter = (series: Series): Series => {
   const factor = scatterFactor(series);
   return { ...series, u: series.u.map((u) => factor * u) };
 };
 
 /** Gathers what the slices say into series along the seam. */
-export function jointSeries({ joint, slices, outcomes }: MeasuredSeam): JointSeries {
+export function jointSeries(seam: MeasuredSeam): JointSeries {
+  const { joint, slices, outcomes } = seam;
   const { at_mm } = slices;
   const column = (key: (typeof KEYS)[keyof typeof KEYS]): Series =>
     withScatter({
@@ -39,9 +49,9 @@ export function jointSeries({ joint, slices, outcomes }: MeasuredSeam): JointSer
   const gap = joint.kind === "butt" ? gapOfButt(outcomes) : gapOfMeeting(outcomes);
   return {
     series: {
-      lateral: column(KEYS.lateral),
+      lateral: { ...column(KEYS.lateral), floor_u: edgeFloor(seam, 0.5) },
       normal: column(KEYS.normal),
-      gap: withScatter({ at_mm, values: gap.values, u: gap.u }),
+      gap: withScatter({ at_mm, values: gap.values, u: gap.u, floor_u: gap.floor_u ?? edgeFloor(seam, 1) }),
       mismatch: column(KEYS.mismatch),
       angle: column(KEYS.angle),
       turn_a: column(KEYS.turn_a),

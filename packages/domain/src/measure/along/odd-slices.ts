@@ -1,7 +1,7 @@
 import { medianOf } from "../fit/median.ts";
 
 /** Neighbours asked to each side. */
-const ASKED = 3;
+const ASKED = 4;
 
 /** A slice this far from what its neighbours say is odd: in standard uncertainties, and at least in mm. */
 const ODD_U = 6;

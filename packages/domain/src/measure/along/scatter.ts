@@ -12,6 +12,8 @@ export interface Series {
   readonly at_mm: Float64Array;
   readonly values: Float64Array;
   readonly u: Float64Array;
+  /** Part of the uncertainty that neighbours share, so that it never averages out; null: none. */
+  readonly floor_u?: Float64Array | null;
 }
 
 /**

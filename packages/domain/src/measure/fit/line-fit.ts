@@ -154,3 +154,33 @@ export function robustLine(points: Points, start: Line, band_mm: number): Fitted
     spread_mm2: line.spread_mm2 ?? 0,
   };
 }
+
+/**
+ * A line of known direction through points of which some are outliers: its offset by Tukey's biweight.
+ * @param start a line near the answer; points beyond `band_mm` of it never count
+ * @param known direction of the line and its standard uncertainty, radians
+ * @returns null where fewer than three points weigh in; the spread is that which gives the known uncertainty
+ */
+export function offsetLine(
+  points: Points,
+  start: Line,
+  known: { readonly band_mm: number; readonly angle_rad: number; readonly u_rad: number },
+): FittedLine | null {
+  const { weights } = room(points.count);
+  let line: Line = { ...start, angle_rad: known.angle_rad };
+  let [scale_mm, inliers, weight] = [0, 0, 0];
+  for (let round = 0; round < ROUNDS; round++) {
+    if (round < 3) scale_mm = scaleAbout(line, points, known.band_mm);
+    inliers = weigh(line, points, scale_mm);
+    if (inliers < 3) return null;
+    let [t_mm, d_mm] = [0, 0];
+    weight = 0;
+    for (let i = 0; i < points.count; i++) {
+      weight += weights[i]!;
+      t_mm += weights[i]! * points.ts[i]!;
+      d_mm += weights[i]! * points.ds[i]!;
+    }
+    line = { t_mm: t_mm / weight, d_mm: d_mm / weight, angle_rad: known.angle_rad };
+  }
+  return { ...line, scale_mm, inliers, weight, spread_mm2: (scale_mm / Math.max(1e-5, known.u_rad)) ** 2 };
+}

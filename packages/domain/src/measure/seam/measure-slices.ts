@@ -1,22 +1,25 @@
 import { expectedFromNeighbours } from "../along/odd-slices.ts";
-import type { Line } from "../fit/line-fit.ts";
-import { medianOf } from "../fit/median.ts";
+import type { FittedLine } from "../fit/line-fit.ts";
 import type { JointFaces } from "../joints/joint-faces.ts";
 import type { SectionSlice } from "../section/face-fit.ts";
-import { fitSection, refit, type SectionFit } from "../section/fit-section.ts";
-import { measureSlice, type SliceOutcome } from "../section/measure-slice.ts";
+import { fitSection, type KnownDirection, refit, type SectionFit } from "../section/fit-section.ts";
+import { measureSlice, type SliceInput, type SliceOutcome } from "../section/measure-slice.ts";
 import type { Placement } from "../section/placement.ts";
+import { type Guides, guidesFor } from "./guides.ts";
 import type { Slices } from "./slices.ts";
 
-/** Neighbours whose faces show where an odd slice's should be. */
-const GUIDES = 5;
-/** They must lie this near, mm. */
-const GUIDE_REACH_MM = 12;
 /** A guided face may lie this far from its guide, mm. */
 const GUIDED_BAND_MM = 0.5;
 
 /** A guided fit replaces a free one only if it is carried by at least this share of its weight. */
 const CARRIED = 0.6;
+
+/** A face this far off its neighbours' direction, radians and standard uncertainties, does not know its own. */
+const ODD_TURN_RAD = (1.5 * Math.PI) / 180;
+const ODD_TURN_U = 3;
+
+/** A face that knows its direction no better than this takes its neighbours', radians. */
+const UNSURE_RAD = (1.2 * Math.PI) / 180;
 
 export const sliceAt = (slices: Slices, i: number): SectionSlice => ({
   l_mm: slices.l_mm,
@@ -25,60 +28,79 @@ export const sliceAt = (slices: Slices, i: number): SectionSlice => ({
   to: slices.starts[i + 1]!,
 });
 
-/** The lines that the found slices around one have in common, per face. */
-function guidesFor(
-  slices: Slices,
-  outcomes: readonly SliceOutcome[],
-  index: number,
-  faces: number,
-): (Line | null)[] {
-  const near: SectionFit[] = [];
-  for (let by = 1; near.length < 2 * GUIDES && by < outcomes.length; by++) {
-    for (const k of [index - by, index + by]) {
-      const one = outcomes[k];
-      if (one?.found && Math.abs(slices.at_mm[k]! - slices.at_mm[index]!) <= GUIDE_REACH_MM)
-        near.push(one.result.fits);
-    }
-    if (by * slices.pitch_mm > GUIDE_REACH_MM) break;
-  }
-  return Array.from({ length: faces }, (_, f) => {
-    const lines = near.flatMap((fits) => fits[f] ?? []);
-    if (lines.length < 2) return null;
-    return {
-      t_mm: 0,
-      d_mm: medianOf(lines.map((line) => line.d_mm - line.t_mm * Math.tan(line.angle_rad))),
-      angle_rad: medianOf(lines.map((line) => line.angle_rad)),
-    };
-  });
-}
-
 const carried = (joint: JointFaces, fits: SectionFit) =>
   (fits[joint.root[0]]?.weight ?? 0) + (fits[joint.root[1]]?.weight ?? 0);
 
-/** Slices that were not found, or stand alone among their neighbours, are looked at again with the neighbours' faces. */
-function guided(slices: Slices, joint: JointFaces, outcomes: readonly SliceOutcome[]): SliceOutcome[] {
-  const column = (pick: "at" | "u", key: "lateral_mm" | "normal_mm") =>
-    Float64Array.from(outcomes, (one) => (one.found ? one.result[pick][key] : Number.NaN));
-  const columns = (["lateral_mm", "normal_mm"] as const).map(
-    (key) => [column("at", key), column("u", key)] as const,
-  );
-  return outcomes.map((outcome, i) => {
-    const odd =
-      outcome.found && columns.some(([values, u]) => expectedFromNeighbours(values, u, i)?.odd ?? false);
-    if (outcome.found && !odd) return outcome;
-    const guides = guidesFor(slices, outcomes, i, joint.faces.length);
-    if (guides.every((line) => line === null)) return outcome;
-    const slice = sliceAt(slices, i);
-    const fits = refit(slice, joint, guides, GUIDED_BAND_MM);
-    const again = measureSlice(slice, joint, fits);
-    if (!again.found) return outcome;
-    const isBetter = !outcome.found || carried(joint, fits) >= CARRIED * carried(joint, outcome.result.fits);
-    return isBetter ? again : outcome;
+/** Faces whose direction is better taken from the sections beside, with that direction. */
+function borrowed(fits: SectionFit, guides: Guides): (KnownDirection | null)[] {
+  return fits.map((fit: FittedLine | null, f) => {
+    const known = guides.directions[f];
+    if (!fit || !known) return null;
+    const u = fit.scale_mm / Math.sqrt(Math.max(1e-9, fit.spread_mm2));
+    const off = Math.abs(fit.angle_rad - known.angle_rad);
+    const isOdd = off > Math.max(ODD_TURN_RAD, ODD_TURN_U * Math.hypot(u, known.u_rad));
+    return isOdd || u > UNSURE_RAD ? known : null;
   });
 }
 
+/** What the neighbours' faces make of a slice; null where they cannot help. */
+function guided(input: SliceInput, outcome: SliceOutcome, guides: Guides): SliceOutcome | null {
+  if (guides.lines.every((line) => line === null)) return null;
+  const { slice, joint } = input;
+  const free = refit(slice, joint, guides.lines, GUIDED_BAND_MM);
+  const known = borrowed(free, guides);
+  const fits = known.some((one) => one !== null)
+    ? refit(slice, joint, guides.lines, GUIDED_BAND_MM, { known })
+    : free;
+  const again = measureSlice(input, fits, guides.directions);
+  if (!again.found) return null;
+  const isBetter = !outcome.found || carried(joint, fits) >= CARRIED * carried(joint, outcome.result.fits);
+  return isBetter ? again : null;
+}
+
+/** Root positions of all slices, as columns. */
+function columnsOf(outcomes: readonly SliceOutcome[]) {
+  const column = (pick: "at" | "u", key: "lateral_mm" | "normal_mm") =>
+    Float64Array.from(outcomes, (one) => (one.found ? one.result[pick][key] : Number.NaN));
+  return (["lateral_mm", "normal_mm"] as const).map((key) => ({
+    values: column("at", key),
+    u: column("u", key),
+  }));
+}
+
+const standsAlone = (columns: ReturnType<typeof columnsOf>, i: number) =>
+  columns.some(({ values, u }) => expectedFromNeighbours(values, u, i)?.odd ?? false);
+
+/** Slices not found, standing alone, under a tack, or with a face that does not know its direction are looked at again. */
+function lookedAtAgain(
+  slices: Slices,
+  inputs: readonly SliceInput[],
+  outcomes: readonly SliceOutcome[],
+): SliceOutcome[] {
+  const columns = columnsOf(outcomes);
+  return outcomes.map((outcome, i) => {
+    const input = inputs[i]!;
+    const guides = guidesFor(slices, outcomes, i, input.joint.faces.length);
+    const isSound =
+      outcome.found &&
+      !outcome.result.tack &&
+      !standsAlone(columns, i) &&
+      borrowed(outcome.result.fits, guides).every((one) => one === null);
+    return isSound ? outcome : (guided(input, outcome, guides) ?? outcome);
+  });
+}
+
+/** A slice that its neighbours on both sides still contradict is no measurement: it is said to be ambiguous. */
+function withoutLoners(outcomes: readonly SliceOutcome[]): SliceOutcome[] {
+  const columns = columnsOf(outcomes);
+  return outcomes.map((outcome, i) =>
+    outcome.found && standsAlone(columns, i) ? { found: false, why: "ambiguous" } : outcome,
+  );
+}
+
 /**
- * Measures every slice by itself, then looks again at those that their neighbours contradict.
+ * Measures every slice by itself, then looks again, with the help of the sections beside, at those that are covered,
+ * contradicted or unsure.
  * @param placed where the joint is expected along the seam
  */
 export function measureSlices(
@@ -86,9 +108,11 @@ export function measureSlices(
   joint: JointFaces,
   placed: (at_mm: number) => Placement,
 ): SliceOutcome[] {
-  const outcomes = Array.from({ length: slices.count }, (_, i): SliceOutcome => {
-    const slice = sliceAt(slices, i);
-    return measureSlice(slice, joint, fitSection(slice, joint, placed(slices.at_mm[i]!), 7919 * (i + 1)));
+  const inputs = Array.from({ length: slices.count }, (_, i): SliceInput => {
+    return { slice: sliceAt(slices, i), joint, placement: placed(slices.at_mm[i]!) };
   });
-  return guided(slices, joint, outcomes);
+  const alone = inputs.map((input, i) =>
+    measureSlice(input, fitSection(input.slice, joint, input.placement, 7919 * (i + 1))),
+  );
+  return withoutLoners(lookedAtAgain(slices, inputs, alone));
 }

@@ -34,6 +34,21 @@ function chosen(slices: Slices): number[] {
   return Array.from({ length: count }, (_, k) => usable[Math.floor(((k + 0.5) * usable.length) / count)]!);
 }
 
+/** Slices to each side whose points help to place a butt joint, no further along than this, mm. */
+const POOLED_SLICES = 3;
+const POOLED_MM = 6;
+
+/** The points that place a slice: its own, and for a butt joint its neighbours', whose lost returns lie elsewhere. */
+function pooled(slices: Slices, joint: JointFaces, i: number): { from: number; to: number } {
+  let [first, last] = [i, i];
+  if (joint.kind === "butt") {
+    const isNear = (k: number) => Math.abs(slices.at_mm[k]! - slices.at_mm[i]!) <= POOLED_MM;
+    while (first > 0 && i - first < POOLED_SLICES && isNear(first - 1)) first -= 1;
+    while (last < slices.count - 1 && last - i < POOLED_SLICES && isNear(last + 1)) last += 1;
+  }
+  return { from: slices.starts[first]!, to: slices.starts[last + 1]! };
+}
+
 /** Finds that agree with those beside them. */
 function agreed(finds: readonly Find[]): Find[] {
   if (finds.length < 4) return [...finds];
@@ -53,12 +68,7 @@ export function placeSeam(slices: Slices, joint: JointFaces): ((at_mm: number) =
   const fields = supportFields(joint);
   const finds: Find[] = [];
   for (const i of chosen(slices)) {
-    const slice = {
-      l_mm: slices.l_mm,
-      n_mm: slices.n_mm,
-      from: slices.starts[i]!,
-      to: slices.starts[i + 1]!,
-    };
+    const slice = { l_mm: slices.l_mm, n_mm: slices.n_mm, ...pooled(slices, joint, i) };
     const find = { ...placeSection(slice, fields, finds.at(-1) ?? null), at_mm: slices.at_mm[i]! };
     if (find.support >= LEAST_SUPPORT) finds.push(find);
   }

@@ -1,5 +1,5 @@
 import { consensusLine } from "../fit/consensus-line.ts";
-import { type FittedLine, type Line, robustLine } from "../fit/line-fit.ts";
+import { type FittedLine, type Line, offsetLine, robustLine } from "../fit/line-fit.ts";
 import type { Face } from "../joints/joint-faces.ts";
 
 /** Points of one section: a stretch of the slices' arrays. */
@@ -21,6 +21,8 @@ export interface FaceSearch {
   readonly to_mm: number;
   /** Seed of the consensus draws; absent: the expected line is near enough to begin with. */
   readonly seed?: number;
+  /** Direction taken as known, from the sections beside: only the offset is fitted. */
+  readonly known?: { readonly angle_rad: number; readonly u_rad: number };
 }
 
 /** Fewer points than this carry no face. */
@@ -72,6 +74,13 @@ export function fitFace(slice: SectionSlice, face: Face, search: FaceSearch): Fi
   const count = gather(slice, face, search);
   if (count < FEWEST_POINTS) return null;
   const points = { ts: room.ts, ds: room.ds, count };
+  if (search.known) {
+    const held = offsetLine(points, search.line, {
+      band_mm: Math.min(FIT_BAND_MM, search.band_mm),
+      ...search.known,
+    });
+    return held && held.inliers >= FEWEST_POINTS ? held : null;
+  }
   let start: Line | null = search.line;
   if (search.seed !== undefined) {
     const found = consensusLine(room.ts, room.ds, count, {
@@ -85,6 +94,11 @@ export function fitFace(slice: SectionSlice, face: Face, search: FaceSearch): Fi
   const fitted = start && robustLine(points, start, Math.min(FIT_BAND_MM, search.band_mm));
   if (!fitted || fitted.inliers < FEWEST_POINTS || Math.abs(fitted.angle_rad) > 1.5 * TURN_RAD) return null;
   return fitted;
+}
+
+/** Places of the points on a face, mm along it, in growing order. */
+export function alongFace(slice: SectionSlice, face: Face, search: FaceSearch): Float64Array {
+  return room.ts.slice(0, gather(slice, face, search)).sort();
 }
 
 /** Where a face's points begin, seen from the root. */
@@ -109,10 +123,9 @@ export function faceEnd(
   line: Line,
   { band_mm, from_mm }: { readonly band_mm: number; readonly from_mm: number },
 ): FaceEnd | null {
-  const reach = { line, band_mm, from_mm, to_mm: face.length_mm + 8 };
-  const count = gather(slice, face, reach);
+  const ts = alongFace(slice, face, { line, band_mm, from_mm, to_mm: face.length_mm + 8 });
+  const count = ts.length;
   if (count < END_POINTS) return null;
-  const ts = room.ts.slice(0, count).sort();
   const steps = Array.from({ length: count - 1 }, (_, i) => ts[i + 1]! - ts[i]!).sort((a, b) => a - b);
   const spacing_mm = Math.max(1e-3, steps[steps.length >> 1] ?? 0);
   // A ghost or spike stands alone: the end is where four points follow within eight usual steps.

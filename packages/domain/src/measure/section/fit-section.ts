@@ -106,16 +106,31 @@ export function fitSection(
   return refit(slice, joint, refit(slice, joint, first, NARROW_BAND_MM), NARROW_BAND_MM);
 }
 
+/** What is known when faces are fitted again. */
+export interface RefitOptions {
+  /** Up to where each plate's root face is covered by a tack, mm along it. */
+  readonly covered_mm?: readonly [a: number, b: number];
+  /** Directions taken as known, one a face; null where the face shows its own. */
+  readonly known?: readonly (KnownDirection | null)[];
+}
+
+/** A face's direction against the model's, and its standard uncertainty, radians. */
+export interface KnownDirection {
+  readonly angle_rad: number;
+  readonly u_rad: number;
+}
+
+const CLEAR = [Number.NEGATIVE_INFINITY, Number.NEGATIVE_INFINITY] as const;
+
 /**
  * Fits every face again near lines that are known already, clear of the corners they make.
- * @param covered_mm up to where each plate's root face is covered by a tack
  */
 export function refit(
   slice: SectionSlice,
   joint: JointFaces,
   lines: readonly (Line | null)[],
   band_mm: number,
-  covered_mm: readonly [a: number, b: number] = [Number.NEGATIVE_INFINITY, Number.NEGATIVE_INFINITY],
+  { covered_mm = CLEAR, known = [] }: RefitOptions = {},
 ): SectionFit {
   return joint.faces.map((face, index) => {
     const line = lines[index];
@@ -123,6 +138,7 @@ export function refit(
     if (!line || !stretch) return null;
     const from_mm = index < 2 ? Math.max(stretch[0], covered_mm[index as 0 | 1]) : stretch[0];
     const to_mm = Math.min(stretch[1] + from_mm - stretch[0], endOf(joint, lines, index));
-    return fitFace(slice, face, { line, band_mm, from_mm, to_mm });
+    const direction = known[index];
+    return fitFace(slice, face, { line, band_mm, from_mm, to_mm, ...(direction && { known: direction }) });
   });
 }

@@ -2,9 +2,11 @@ import type { BLIND_REASONS } from "../../schemas/scan-result.ts";
 import type { JointAt } from "../joints/construct-root.ts";
 import type { JointFaces } from "../joints/joint-faces.ts";
 import { constructWithU, type JointWithU } from "../joints/joint-uncertainty.ts";
-import { FEWEST_POINTS, faceEnd, type SectionSlice } from "./face-fit.ts";
-import { refit, type SectionFit } from "./fit-section.ts";
-import { bandOf, type SeenGap, seenGap } from "./seen-gap.ts";
+import { FEWEST_POINTS, type SectionSlice } from "./face-fit.ts";
+import { type RefitOptions, refit, type SectionFit } from "./fit-section.ts";
+import { type Placement, placedLine } from "./placement.ts";
+import { type SeenGap, seenGap } from "./seen-gap.ts";
+import { surfaceEdge } from "./surface-edge.ts";
 import { type TackReach, tackOver } from "./tack.ts";
 
 export type BlindReason = (typeof BLIND_REASONS)[number];
@@ -26,8 +28,8 @@ export type SliceOutcome =
   | { readonly found: true; readonly result: SliceResult }
   | { readonly found: false; readonly why: BlindReason };
 
-/** Ends of surfaces that are seen as edges only; the light's next point may lie anywhere in one spacing beyond. */
-function edgesOf(slice: SectionSlice, joint: JointFaces, fits: SectionFit) {
+/** Edges of plates that show only their surface. */
+function edgesOf(slice: SectionSlice, joint: JointFaces, fits: SectionFit, placement: Placement) {
   const edges: [number, number] = [Number.NaN, Number.NaN];
   const u_edges: [number, number] = [0, 0];
   for (const side of [0, 1] as const) {
@@ -35,10 +37,10 @@ function edgesOf(slice: SectionSlice, joint: JointFaces, fits: SectionFit) {
     const face = joint.faces[index];
     const fit = fits[index];
     if (joint.kind !== "butt" || joint.form[side] !== "edge" || !face || !fit) continue;
-    const end = faceEnd(slice, face, fit, { band_mm: bandOf(fit), from_mm: -8 });
-    if (!end) continue;
-    edges[side] = end.t_mm - end.spacing_mm / 2;
-    u_edges[side] = end.spacing_mm / Math.sqrt(12);
+    const edge = surfaceEdge(slice, joint, { face, fit, expected_mm: placedLine(face, placement).t_mm });
+    if (!edge) continue;
+    edges[side] = edge.t_mm;
+    u_edges[side] = edge.u_mm;
   }
   return { edges, u_edges };
 }
@@ -60,24 +62,56 @@ function whyNot(slice: SectionSlice, joint: JointFaces, fits: SectionFit): Blind
 const TOE_MM = 0.9;
 const GUIDED_BAND_MM = 0.5;
 
-function construct(slice: SectionSlice, joint: JointFaces, fits: SectionFit): JointWithU | null {
-  const { edges, u_edges } = edgesOf(slice, joint, fits);
+/** An edge is seen only where a tack's metal stays this far below it, mm. */
+const EDGE_CLEAR_MM = 0.5;
+
+/** What a slice is measured from: its points, its joint, and where the joint is expected. */
+export interface SliceInput {
+  readonly slice: SectionSlice;
+  readonly joint: JointFaces;
+  readonly placement: Placement;
+}
+
+function construct({ slice, joint, placement }: SliceInput, fits: SectionFit): JointWithU | null {
+  const { edges, u_edges } = edgesOf(slice, joint, fits, placement);
   return constructWithU(joint, fits, edges, u_edges);
 }
 
 /** Under a tack, the same from faces clear of its toe, where enough of them is left. */
-function besideTack(slice: SectionSlice, joint: JointFaces, fits: SectionFit, reach: TackReach) {
-  const clear = refit(slice, joint, fits, GUIDED_BAND_MM, [reach[0] + TOE_MM, reach[1] + TOE_MM]);
-  const built = construct(slice, joint, clear);
+function besideTack(input: SliceInput, fits: SectionFit, reach: TackReach, known: RefitOptions["known"]) {
+  const clear = refit(input.slice, input.joint, fits, GUIDED_BAND_MM, {
+    covered_mm: [reach[0] + TOE_MM, reach[1] + TOE_MM],
+    ...(known && { known }),
+  });
+  const built = construct(input, clear);
   return built && { fits: clear, built };
 }
 
-/** The joint of one section from its fitted faces, or why it cannot be said. */
-export function measureSlice(slice: SectionSlice, joint: JointFaces, fitted: SectionFit): SliceOutcome {
-  const first = construct(slice, joint, fitted);
+/** Whether a tack reaches up to an edge that the root is found from: nothing beside it shows where that edge is. */
+function hidesEdge(joint: JointFaces, reach: TackReach): boolean {
+  return ([0, 1] as const).some(
+    (side) =>
+      joint.kind === "butt" &&
+      joint.form[side] === "edge" &&
+      reach[side] > joint.depth_mm[side] - EDGE_CLEAR_MM,
+  );
+}
+
+/**
+ * The joint of one section from its fitted faces, or why it cannot be said.
+ * @param known directions that the sections beside give, for faces that show too little of their own
+ */
+export function measureSlice(
+  input: SliceInput,
+  fitted: SectionFit,
+  known?: RefitOptions["known"],
+): SliceOutcome {
+  const { slice, joint } = input;
+  const first = construct(input, fitted);
   if (!first) return { found: false, why: whyNot(slice, joint, fitted) };
   const tack = tackOver(slice, joint, fitted, first.at);
-  const { fits, built } = (tack && besideTack(slice, joint, fitted, tack)) ?? { fits: fitted, built: first };
+  if (tack && hidesEdge(joint, tack)) return { found: false, why: "root_not_seen" };
+  const { fits, built } = (tack && besideTack(input, fitted, tack, known)) ?? { fits: fitted, built: first };
   if (Math.hypot(built.u.lateral_mm, built.u.normal_mm) > LEAST_SURE_MM)
     return { found: false, why: "root_not_seen" };
   const seen_gap = tack ? null : seenGap(slice, joint, fits);

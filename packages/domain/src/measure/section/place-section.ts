@@ -16,8 +16,12 @@ const HALF_FIELD_MM = 48;
 const CELL_MM = 0.25;
 const CELLS = Math.round((2 * HALF_FIELD_MM) / CELL_MM);
 
-/** Points asked in each trial. */
+/** Points asked in each trial; more where only an opening of a few points tells the place. */
 const ASKED = 64;
+const ASKED_BUTT = 256;
+
+/** What a point in the open groove of a butt joint counts against a place. */
+const AGAINST = -1;
 
 /** Of places that explain the points alike, the nearest to the model is taken. */
 const NEARER = 4e-4;
@@ -29,6 +33,8 @@ type Field = Float32Array;
 export interface SupportFields {
   readonly wide: Field;
   readonly near: Field;
+  /** How many points a trial asks. */
+  readonly asked: number;
 }
 
 /** Rows of the drawing as segments. */
@@ -48,7 +54,8 @@ function squareToSegment(l: number, n: number, [l0 = 0, n0 = 0, l1 = 0, n1 = 0]:
 
 /** The support fields of a joint. */
 export function supportFields(joint: JointFaces): SupportFields {
-  return { wide: fieldOf(joint, WIDE_MM), near: fieldOf(joint, NEAR_MM) };
+  const asked = joint.kind === "butt" ? ASKED_BUTT : ASKED;
+  return { wide: fieldOf(joint, WIDE_MM), near: fieldOf(joint, NEAR_MM), asked };
 }
 
 /** Only cells near a face are written. */
@@ -70,8 +77,40 @@ function fieldOf(joint: JointFaces, tolerance_mm: number): Field {
       }
     }
   }
+  if (joint.kind === "butt") markOpening(field, joint);
   return field;
 }
+
+/** Between the plates of a butt joint there is no steel: surfaces that slide along themselves are held by that. */
+function markOpening(field: Field, joint: JointFaces): void {
+  const [a, b] = joint.faces;
+  if (!a || !b) return;
+  const depth = Math.max(...joint.depth_mm);
+  const sides = [a, b].map((face, side) => {
+    const isEdge = joint.form[side as 0 | 1] === "edge";
+    const slope = isEdge ? 0 : Math.cos(face.direction_rad) / Math.max(0.2, Math.sin(face.direction_rad));
+    const at = isEdge ? face.near[0] : face.near[0] - face.near[1] * slope;
+    return { at, slope };
+  });
+  const [left, right] = sides;
+  if (!left || !right) return;
+  for (let i = 0; i < CELLS; i++) {
+    const n = (i + 0.5) * CELL_MM - HALF_FIELD_MM;
+    if (n > depth + OPEN_ABOVE_MM || n < -OPEN_BELOW_MM) continue;
+    const height = Math.max(0, Math.min(n, depth));
+    const from = left.at + height * left.slope + CLEAR_MM;
+    const to = right.at + height * right.slope - CLEAR_MM;
+    for (let j = 0; j < CELLS; j++) {
+      const l = (j + 0.5) * CELL_MM - HALF_FIELD_MM;
+      if (l > from && l < to) field[i * CELLS + j] = AGAINST;
+    }
+  }
+}
+
+/** The opening reaches a little above the surfaces and below the root, and keeps clear of the edges' own noise, mm. */
+const OPEN_ABOVE_MM = 1;
+const OPEN_BELOW_MM = 4;
+const CLEAR_MM = 0.35;
 
 interface Asked {
   readonly l: Float64Array;
@@ -90,9 +129,9 @@ function supportAt(field: Field, asked: Asked, l_mm: number, n_mm: number): numb
 }
 
 /** Some of the section's points, turned back. */
-function asked(slice: SectionSlice, turn_rad: number): Asked {
+function asked(slice: SectionSlice, turn_rad: number, most: number): Asked {
   const size = slice.to - slice.from;
-  const count = Math.min(ASKED, size);
+  const count = Math.min(most, size);
   const [cos, sin] = [Math.cos(-turn_rad), Math.sin(-turn_rad)];
   const l = new Float64Array(count);
   const n = new Float64Array(count);
@@ -171,7 +210,7 @@ export function placeSection(slice: SectionSlice, fields: SupportFields, near: P
   const take = (trial: Trial, turn_rad: number) => {
     if (trial.support > best.support + 1e-9) best = placedBack(trial, turn_rad);
   };
-  const turns = TURNS_RAD.map((turn_rad) => ({ turn_rad, points: asked(slice, turn_rad) }));
+  const turns = TURNS_RAD.map((turn_rad) => ({ turn_rad, points: asked(slice, turn_rad, fields.asked) }));
   if (near)
     for (const { turn_rad, points } of turns)
       take(refined(fields.near, points, turnedBack(near, turn_rad), STEP_MM / 2), turn_rad);

@@ -26,9 +26,12 @@ export function tackOver(
 ): TackReach | null {
   const [a, b] = joint.root.map((index, side) => {
     const face = joint.faces[index];
-    const along = (face?.direction_rad ?? 0) + (fits[index]?.angle_rad ?? 0);
     // The open side is to the right of plate A's outward direction and to the left of plate B's.
     const sign = side === 0 ? -1 : 1;
+    // A plate that shows only its edge bounds the groove by the edge's face, square to its surface.
+    const isEdge = joint.kind === "butt" && joint.form[side as 0 | 1] === "edge";
+    const along =
+      (face?.direction_rad ?? 0) + (fits[index]?.angle_rad ?? 0) + (isEdge ? (sign * Math.PI) / 2 : 0);
     return { dl: Math.cos(along), dn: Math.sin(along), sign, near: face?.near ?? [0, 0] };
   });
   if (!a || !b) return null;
