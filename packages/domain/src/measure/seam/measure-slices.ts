@@ -2,8 +2,14 @@ import { expectedFromNeighbours } from "../along/odd-slices.ts";
 import type { FittedLine } from "../fit/line-fit.ts";
 import type { JointFaces } from "../joints/joint-faces.ts";
 import type { SectionSlice } from "../section/face-fit.ts";
-import { fitSection, type KnownDirection, refit, type SectionFit } from "../section/fit-section.ts";
-import { measureSlice, type SliceInput, type SliceOutcome } from "../section/measure-slice.ts";
+import {
+  fitSection,
+  type KnownDirection,
+  refit,
+  type SectionFit,
+  type SliceInput,
+} from "../section/fit-section.ts";
+import { measureSlice, type SliceOutcome } from "../section/measure-slice.ts";
 import type { Placement } from "../section/placement.ts";
 import { type Guides, guidesFor } from "./guides.ts";
 import type { Slices } from "./slices.ts";
@@ -46,11 +52,11 @@ function borrowed(fits: SectionFit, guides: Guides): (KnownDirection | null)[] {
 /** What the neighbours' faces make of a slice; null where they cannot help. */
 function guided(input: SliceInput, outcome: SliceOutcome, guides: Guides): SliceOutcome | null {
   if (guides.lines.every((line) => line === null)) return null;
-  const { slice, joint } = input;
-  const free = refit(slice, joint, guides.lines, GUIDED_BAND_MM);
+  const { joint } = input;
+  const free = refit(input, guides.lines, GUIDED_BAND_MM);
   const known = borrowed(free, guides);
   const fits = known.some((one) => one !== null)
-    ? refit(slice, joint, guides.lines, GUIDED_BAND_MM, { known })
+    ? refit(input, guides.lines, GUIDED_BAND_MM, { known })
     : free;
   const again = measureSlice(input, fits, guides.directions);
   if (!again.found) return null;
@@ -111,8 +117,6 @@ export function measureSlices(
   const inputs = Array.from({ length: slices.count }, (_, i): SliceInput => {
     return { slice: sliceAt(slices, i), joint, placement: placed(slices.at_mm[i]!) };
   });
-  const alone = inputs.map((input, i) =>
-    measureSlice(input, fitSection(input.slice, joint, input.placement, 7919 * (i + 1))),
-  );
+  const alone = inputs.map((input, i) => measureSlice(input, fitSection(input, 7919 * (i + 1))));
   return withoutLoners(lookedAtAgain(slices, inputs, alone));
 }

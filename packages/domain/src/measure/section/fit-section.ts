@@ -14,6 +14,14 @@ const WINDOW_MM = 15;
 /** Corners are rounded by the width of the laser line; points this near to one belong to no face, mm. */
 const CORNER_MM = 0.7;
 
+/** What a section is fitted from: its points, its joint, and where the joint is expected. */
+export interface SliceInput {
+  readonly slice: SectionSlice;
+  readonly joint: JointFaces;
+  /** Within about 2 mm and 6 degrees. */
+  readonly placement: Placement;
+}
+
 /** The fitted faces of one section, in the order of the joint's faces; null where one was not found. */
 export type SectionFit = readonly (FittedLine | null)[];
 
@@ -48,18 +56,30 @@ const margin = (face: Face) => Math.min(CORNER_MM, 0.15 * face.length_mm);
 
 /** The stretch of a face that is clear of its corners, from what was fitted first. */
 function clearStretch(
-  joint: JointFaces,
+  { joint, placement }: SliceInput,
   lines: readonly (Line | null)[],
   index: number,
 ): readonly [from: number, to: number] | null {
   const face = joint.faces[index];
   const line = lines[index];
   if (!face || !line) return null;
-  const { near } = neighbours(joint, index);
+  const { near, far } = neighbours(joint, index);
   const from =
-    (meetingOf(joint, lines, index, near) ?? (near < 0 ? -0.5 : 0)) + (near < 0 ? 0 : margin(face));
+    near >= 0
+      ? (meetingOf(joint, lines, index, near) ?? 0) + margin(face)
+      : far >= 0
+        ? freeEnd(face, meetingOf(joint, lines, index, far))
+        : placedLine(face, placement).t_mm + EDGE_DOUBT_MM;
   return [from, Math.min(endOf(joint, lines, index), from + WINDOW_MM)];
 }
+
+/** A bevel ends freely at its root edge: its length from the corner it makes with the surface, and a little more, mm. */
+const freeEnd = (face: Face, corner_mm: number | null): number =>
+  corner_mm === null ? Number.NEGATIVE_INFINITY : corner_mm - face.length_mm - BEYOND_EDGE_MM;
+const BEYOND_EDGE_MM = 1.5;
+
+/** Where a surface ends at an edge is only expected, not fitted: its points are taken from a little past it, mm. */
+const EDGE_DOUBT_MM = 1;
 
 /** Where a face ends, clear of its far corner. */
 function endOf(joint: JointFaces, lines: readonly (Line | null)[], index: number): number {
@@ -86,15 +106,10 @@ function meetingOf(
 
 /**
  * Fits every face of a joint to the points of one section.
- * @param placement where the joint is expected, within about 2 mm and 6 degrees
  * @param seed of the consensus draws
  */
-export function fitSection(
-  slice: SectionSlice,
-  joint: JointFaces,
-  placement: Placement,
-  seed: number,
-): SectionFit {
+export function fitSection(input: SliceInput, seed: number): SectionFit {
+  const { slice, joint, placement } = input;
   const first = joint.faces.map((face, index) => {
     const line = placedLine(face, placement);
     const begin_mm = line.t_mm + (joint.kind === "butt" && index < 2 ? -3 : Math.min(0.5, margin(face)));
@@ -103,7 +118,7 @@ export function fitSection(
     const search: FaceSearch = { line, band_mm: WIDE_BAND_MM, from_mm: begin_mm, to_mm, seed: seed + index };
     return fitFace(slice, face, search);
   });
-  return refit(slice, joint, refit(slice, joint, first, NARROW_BAND_MM), NARROW_BAND_MM);
+  return refit(input, refit(input, first, NARROW_BAND_MM), NARROW_BAND_MM);
 }
 
 /** What is known when faces are fitted again. */
@@ -126,15 +141,15 @@ const CLEAR = [Number.NEGATIVE_INFINITY, Number.NEGATIVE_INFINITY] as const;
  * Fits every face again near lines that are known already, clear of the corners they make.
  */
 export function refit(
-  slice: SectionSlice,
-  joint: JointFaces,
+  input: SliceInput,
   lines: readonly (Line | null)[],
   band_mm: number,
   { covered_mm = CLEAR, known = [] }: RefitOptions = {},
 ): SectionFit {
+  const { slice, joint } = input;
   return joint.faces.map((face, index) => {
     const line = lines[index];
-    const stretch = clearStretch(joint, lines, index);
+    const stretch = clearStretch(input, lines, index);
     if (!line || !stretch) return null;
     const from_mm = index < 2 ? Math.max(stretch[0], covered_mm[index as 0 | 1]) : stretch[0];
     const to_mm = Math.min(stretch[1] + from_mm - stretch[0], endOf(joint, lines, index));

@@ -3,7 +3,7 @@ import type { JointAt } from "../joints/construct-root.ts";
 import type { JointFaces } from "../joints/joint-faces.ts";
 import { constructWithU, type JointWithU } from "../joints/joint-uncertainty.ts";
 import { FEWEST_POINTS, type SectionSlice } from "./face-fit.ts";
-import { type RefitOptions, refit, type SectionFit } from "./fit-section.ts";
+import { type RefitOptions, refit, type SectionFit, type SliceInput } from "./fit-section.ts";
 import { type Placement, placedLine } from "./placement.ts";
 import { type SeenGap, seenGap } from "./seen-gap.ts";
 import { surfaceEdge } from "./surface-edge.ts";
@@ -65,13 +65,6 @@ const GUIDED_BAND_MM = 0.5;
 /** An edge is seen only where a tack's metal stays this far below it, mm. */
 const EDGE_CLEAR_MM = 0.5;
 
-/** What a slice is measured from: its points, its joint, and where the joint is expected. */
-export interface SliceInput {
-  readonly slice: SectionSlice;
-  readonly joint: JointFaces;
-  readonly placement: Placement;
-}
-
 function construct({ slice, joint, placement }: SliceInput, fits: SectionFit): JointWithU | null {
   const { edges, u_edges } = edgesOf(slice, joint, fits, placement);
   return constructWithU(joint, fits, edges, u_edges);
@@ -79,7 +72,7 @@ function construct({ slice, joint, placement }: SliceInput, fits: SectionFit): J
 
 /** Under a tack, the same from faces clear of its toe, where enough of them is left. */
 function besideTack(input: SliceInput, fits: SectionFit, reach: TackReach, known: RefitOptions["known"]) {
-  const clear = refit(input.slice, input.joint, fits, GUIDED_BAND_MM, {
+  const clear = refit(input, fits, GUIDED_BAND_MM, {
     covered_mm: [reach[0] + TOE_MM, reach[1] + TOE_MM],
     ...(known && { known }),
   });
