@@ -12,6 +12,7 @@ import {
 import { measureSlice, type SliceOutcome } from "../section/measure-slice.ts";
 import type { Placement } from "../section/placement.ts";
 import { type Guides, guidesFor } from "./guides.ts";
+import type { SeamPlacement } from "./place-seam.ts";
 import type { Slices } from "./slices.ts";
 
 /** A guided face may lie this far from its guide, mm. */
@@ -104,19 +105,39 @@ function withoutLoners(outcomes: readonly SliceOutcome[]): SliceOutcome[] {
   );
 }
 
+/** A slice measured by itself, at the first placement that serves; the first is kept where none does. */
+function measuredAlone(
+  slice: SectionSlice,
+  joint: JointFaces,
+  placements: readonly Placement[],
+  seed: number,
+): { input: SliceInput; outcome: SliceOutcome } {
+  let first: { input: SliceInput; outcome: SliceOutcome } | null = null;
+  for (const placement of placements) {
+    const input = { slice, joint, placement };
+    const outcome = measureSlice(input, fitSection(input, seed));
+    if (outcome.found) return { input, outcome };
+    first ??= { input, outcome };
+  }
+  if (!first) throw new RangeError("placements: expected at least one");
+  return first;
+}
+
 /**
  * Measures every slice by itself, then looks again, with the help of the sections beside, at those that are covered,
  * contradicted or unsure.
  * @param placed where the joint is expected along the seam
  */
-export function measureSlices(
-  slices: Slices,
-  joint: JointFaces,
-  placed: (at_mm: number) => Placement,
-): SliceOutcome[] {
-  const inputs = Array.from({ length: slices.count }, (_, i): SliceInput => {
-    return { slice: sliceAt(slices, i), joint, placement: placed(slices.at_mm[i]!) };
-  });
-  const alone = inputs.map((input, i) => measureSlice(input, fitSection(input, 7919 * (i + 1))));
-  return withoutLoners(lookedAtAgain(slices, inputs, alone));
+export function measureSlices(slices: Slices, joint: JointFaces, placed: SeamPlacement): SliceOutcome[] {
+  const alone = Array.from({ length: slices.count }, (_, i) =>
+    measuredAlone(sliceAt(slices, i), joint, placed(slices.at_mm[i]!), 7919 * (i + 1)),
+  );
+  const inputs = alone.map(({ input }) => input);
+  return withoutLoners(
+    lookedAtAgain(
+      slices,
+      inputs,
+      alone.map(({ outcome }) => outcome),
+    ),
+  );
 }

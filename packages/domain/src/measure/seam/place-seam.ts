@@ -61,10 +61,16 @@ function agreed(finds: readonly Find[]): Find[] {
 }
 
 /**
- * Where the joint lies along the whole seam, found at a few places and interpolated between them.
- * @returns the placement expected at a place along the seam; null where the joint is found nowhere
+ * Placements to try at a place along the seam, likeliest first: between the finds on both sides, then as at the one
+ * before and as at the one after, for where the joint steps between them.
  */
-export function placeSeam(slices: Slices, joint: JointFaces): ((at_mm: number) => Placement) | null {
+export type SeamPlacement = (at_mm: number) => readonly Placement[];
+
+/**
+ * Where the joint lies along the whole seam, found at a few places.
+ * @returns null where the joint is found nowhere
+ */
+export function placeSeam(slices: Slices, joint: JointFaces): SeamPlacement | null {
   const fields = supportFields(joint);
   const finds: Find[] = [];
   for (const i of chosen(slices)) {
@@ -73,10 +79,10 @@ export function placeSeam(slices: Slices, joint: JointFaces): ((at_mm: number) =
     if (find.support >= LEAST_SUPPORT) finds.push(find);
   }
   const places = agreed(finds);
-  return places.length === 0 ? null : (at_mm) => between(places, at_mm);
+  return places.length === 0 ? null : (at_mm) => tried(places, at_mm);
 }
 
-function between(places: readonly Find[], at_mm: number): Placement {
+function tried(places: readonly Find[], at_mm: number): Placement[] {
   let k = 0;
   while (k < places.length - 2 && places[k + 1]!.at_mm < at_mm) k += 1;
   const a = places[k]!;
@@ -84,9 +90,14 @@ function between(places: readonly Find[], at_mm: number): Placement {
   const run = b.at_mm - a.at_mm;
   const share = run > 0 ? Math.max(0, Math.min(1, (at_mm - a.at_mm) / run)) : 0;
   const mix = (from: number, to: number) => from + share * (to - from);
-  return {
+  const middle = {
     l_mm: mix(a.l_mm, b.l_mm),
     n_mm: mix(a.n_mm, b.n_mm),
     turn_rad: mix(a.turn_rad, b.turn_rad),
   };
+  const isStep = Math.hypot(b.l_mm - a.l_mm, b.n_mm - a.n_mm) > STEP_MM;
+  return isStep ? [middle, a, b] : [middle];
 }
+
+/** Finds that differ by more than this may have a step between them, mm. */
+const STEP_MM = 0.8;

@@ -35,6 +35,8 @@ export interface SupportFields {
   readonly near: Field;
   /** How many points a trial asks. */
   readonly asked: number;
+  /** Support at which a place beside the last find is believed. */
+  readonly believed: number;
 }
 
 /** Rows of the drawing as segments. */
@@ -54,8 +56,13 @@ function squareToSegment(l: number, n: number, [l0 = 0, n0 = 0, l1 = 0, n1 = 0]:
 
 /** The support fields of a joint. */
 export function supportFields(joint: JointFaces): SupportFields {
-  const asked = joint.kind === "butt" ? ASKED_BUTT : ASKED;
-  return { wide: fieldOf(joint, WIDE_MM), near: fieldOf(joint, NEAR_MM), asked };
+  const isButt = joint.kind === "butt";
+  return {
+    wide: fieldOf(joint, WIDE_MM),
+    near: fieldOf(joint, NEAR_MM),
+    asked: isButt ? ASKED_BUTT : ASKED,
+    believed: isButt ? BELIEVED_BUTT : BELIEVED,
+  };
 }
 
 /** Only cells near a face are written. */
@@ -150,6 +157,7 @@ export interface Placed extends Placement {
 
 /** A place that explains this share of the points is believed without a search of all others. */
 const BELIEVED = 0.75;
+const BELIEVED_BUTT = 0.9;
 
 interface Trial {
   readonly l: number;
@@ -214,7 +222,7 @@ export function placeSection(slice: SectionSlice, fields: SupportFields, near: P
   if (near)
     for (const { turn_rad, points } of turns)
       take(refined(fields.near, points, turnedBack(near, turn_rad), STEP_MM / 2), turn_rad);
-  if (best.support >= BELIEVED) return best;
+  if (best.support >= fields.believed) return best;
   for (const { turn_rad, points } of turns) take(searched(fields, points), turn_rad);
   return best;
 }

@@ -26,7 +26,8 @@ function openings(ts: Float64Array, least_mm: number): { from: number; to: numbe
 
 /**
  * The edge of a plate that shows only its surface: the far side of the opening nearest to where it is expected.
- * The steel may end anywhere up to one spacing before its first point: half of it is taken off, u = spacing / √12.
+ * The steel may end anywhere up to one spacing before its first point, of which half is taken off, and one return at an
+ * edge is easily lost: u = spacing / √3, rectangular over one spacing either way.
  * @param expected_mm where the placed model has the edge, mm along the face
  * @returns null where there is no opening near
  */
@@ -52,5 +53,5 @@ export function surfaceEdge(
     Math.abs(b.to - expected_mm) < Math.abs(a.to - expected_mm) ? b : a,
   );
   if (Math.abs(best.to - expected_mm) > SEARCH_MM) return null;
-  return { t_mm: best.to - spacing_mm / 2, u_mm: spacing_mm / Math.sqrt(12) };
+  return { t_mm: best.to - spacing_mm / 2, u_mm: spacing_mm / Math.sqrt(3) };
 }
