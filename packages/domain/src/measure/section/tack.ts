@@ -9,6 +9,7 @@ const NEAR_ROOT_MM = 6;
 
 /** Ghosts and spatter are a few points; a tack is a surface. */
 const FEWEST_POINTS = 5;
+const FEWEST_SHARE = 0.025;
 
 /** How far a tack's metal reaches along each plate's root face, mm from that face's root end. */
 export type TackReach = readonly [a_mm: number, b_mm: number];
@@ -49,7 +50,7 @@ export function tackOver(
     reach[0] = Math.max(reach[0], (l + edge_mm) * a.dl + n * a.dn);
     reach[1] = Math.max(reach[1], (l - edge_mm) * b.dl + n * b.dn);
   }
-  if (over < FEWEST_POINTS) return null;
+  if (over < Math.max(FEWEST_POINTS, FEWEST_SHARE * (slice.to - slice.from))) return null;
   // Measured from the root as it is; the faces' own axes begin at the nominal one.
   const shift = (side: { dl: number; dn: number; near: readonly number[] }, edge: number) =>
     (at.lateral_mm + edge - side.near[0]!) * side.dl + (at.normal_mm - side.near[1]!) * side.dn;
