@@ -6,10 +6,12 @@ import type { ChangeTrx, Row } from "../ledger/change.ts";
 
 /** The facts of a seam's attempt, from its records. */
 export async function readSeamFacts(db: Knex, seamId: string, attempt: number): Promise<SeamFacts> {
-  const scan: { verdict: Verdict } | undefined = await db("scans")
+  const scan: { verdict: Verdict; reason: string | null } | undefined = await db("scans")
     .where({ seam_id: seamId, attempt, stage: "fitup" })
     .orderBy("ledger_seq", "desc")
-    .first("verdict");
+    .select("verdict")
+    .jsonExtract("summary", "$.reasons[0].text", "reason")
+    .first();
   const passes: { ledger_seq: number }[] = await db("passes")
     .where({ seam_id: seamId, attempt })
     .orderBy("ledger_seq")
@@ -21,6 +23,7 @@ export async function readSeamFacts(db: Knex, seamId: string, attempt: number): 
   return {
     attempt,
     verdict: scan?.verdict ?? null,
+    verdict_reason: scan?.reason ?? null,
     pass_seqs: passes.map((pass) => pass.ledger_seq),
     inspections,
   };

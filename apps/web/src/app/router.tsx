@@ -54,7 +54,7 @@ function ShellRoute(): ReactElement {
   };
   const person = account && { name: account.name, role: account.roles.join(", "), onSignOut };
   return (
-    <Shell person={person}>
+    <Shell person={person} isDoor={pathname === PATHS.signIn.path}>
       <Outlet />
     </Shell>
   );

@@ -15,7 +15,12 @@ export interface ShellPerson {
 }
 
 /** The frame of every page: the soot bar with its one door, and the page beneath it. */
-export function Shell(props: { person: ShellPerson | null; children: ReactNode }): ReactElement {
+export function Shell(props: {
+  person: ShellPerson | null;
+  /** At the door there is nowhere to go and nothing to find yet. */
+  isDoor?: boolean;
+  children: ReactNode;
+}): ReactElement {
   const main = useRef<HTMLElement>(null);
   useRouteFocus(main);
   return (
@@ -29,10 +34,16 @@ export function Shell(props: { person: ShellPerson | null; children: ReactNode }
       <header className="screen-only on-soot top-0 z-30 max-lg:relative lg:sticky">
         <div className="mx-auto flex min-h-14 max-w-[100rem] flex-wrap items-center gap-x-7 px-4 max-lg:gap-x-3 sm:px-6">
           <Wordmark />
-          <MainNav />
-          <NarrowNav />
-          <div className="h-0 basis-full lg:hidden" />
-          <FindField />
+          {props.isDoor === true ? (
+            <div className="ml-auto" />
+          ) : (
+            <>
+              <MainNav />
+              <NarrowNav />
+              <div className="h-0 basis-full lg:hidden" />
+              <FindField />
+            </>
+          )}
           <UserMenu person={props.person} />
         </div>
         <NavigationProgress />

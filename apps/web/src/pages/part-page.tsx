@@ -8,7 +8,7 @@ import { useChangedKeys } from "../features/floor/changed-keys.ts";
 import { LabelsDialog } from "../features/labels/labels-dialog.tsx";
 import { ContentsList } from "../features/parts/contents-list.tsx";
 import { PartTodo } from "../features/parts/part-todo.tsx";
-import { partState, partStateWord, tallyWords } from "../features/parts/part-words.ts";
+import { partLook, tallyWords } from "../features/parts/part-words.ts";
 import { partQueries } from "../features/parts/parts.queries.ts";
 import { PieceForm } from "../features/parts/piece-form.tsx";
 import { RollTable } from "../features/parts/roll-table.tsx";
@@ -38,13 +38,12 @@ export default function PartPage(): ReactElement {
   const mayBuild = useMay("parts:write");
   const seen = useMemo(() => new Map(part.roll.map((seam) => [seam.id, seam.changed_at])), [part]);
   const changed = useChangedKeys(seen);
-  const word = partStateWord(part.seams);
   return (
     <>
       <PageHead
         title={part.name}
         above={<Breadcrumbs trail={[{ to: PATHS.parts.path, label: "Parts" }]} />}
-        state={<StateMark state={partState(part.seams)} {...(word !== null && { word })} />}
+        state={<StateMark {...partLook(part.seams)} />}
         facts={
           <>
             Drawing{" "}

@@ -16,6 +16,8 @@ export interface SeamFacts {
   readonly attempt: number;
   /** Verdict of the attempt's latest fit-up scan; null without one. */
   readonly verdict: Verdict | null;
+  /** The first reason of that verdict, as a sentence; null where it has none. */
+  readonly verdict_reason?: string | null;
   /** Ledger places of the attempt's passes, ascending. */
   readonly pass_seqs: readonly number[];
   /** The attempt's inspections, ascending by ledger place. */
@@ -39,9 +41,10 @@ function standing(facts: SeamFacts): InspectionFact[] {
 }
 
 function beforeWelding(facts: SeamFacts): StateWithReason {
-  if (facts.verdict === "hold") return { state: "held", reason: "The fit-up scan's verdict is hold." };
+  const why = facts.verdict_reason ? `: ${facts.verdict_reason}` : "";
+  if (facts.verdict === "hold") return { state: "held", reason: `The fit-up scan's verdict is hold${why}.` };
   if (facts.verdict !== null)
-    return { state: "clear", reason: `The fit-up scan's verdict is ${facts.verdict}.` };
+    return { state: "clear", reason: `The fit-up scan's verdict is ${facts.verdict}${why}.` };
   if (facts.attempt > 1) return { state: "repair", reason: `Repair ${facts.attempt - 1} has begun.` };
   return { state: "planned", reason: "Nothing is recorded yet." };
 }

@@ -21,21 +21,21 @@ export function PartTodo(props: { roll: readonly SeamRow[] }): ReactElement {
   if (waiting.length === 0) return <p className="-mt-3 mb-5">Nothing is left to do on its seams.</p>;
   return (
     <ul className="-mt-2 mb-5 grid gap-1">
-      {waiting.map((one) => (
-        <li key={one.words} className="flex flex-wrap items-baseline gap-x-2">
-          <span className={`flex items-baseline gap-2 font-semibold ${TONES[one.tone]}`}>
-            {one.tone === "plain" ? null : (
-              <StateShapeIcon shape={one.tone === "stop" ? "diamond" : "triangle"} size={12} />
+      {waiting.map((deed) => (
+        <li key={deed.many} className="flex flex-wrap items-baseline gap-x-2">
+          <span className={`flex items-baseline gap-2 font-semibold ${TONES[deed.tone]}`}>
+            {deed.tone === "plain" ? null : (
+              <StateShapeIcon shape={deed.tone === "stop" ? "diamond" : "triangle"} size={12} />
             )}
-            {one.seams.length} {one.words}:
+            {deed.seams.length} {deed.seams.length === 1 ? deed.one : deed.many}:
           </span>
-          {one.seams.slice(0, NAMED).map((seam) => (
+          {deed.seams.slice(0, NAMED).map((seam) => (
             <Link key={seam.id} to={pathTo("seam", { tag: seam.tag })} className="figures">
               {seamNumber(seam.number, seam.attempt)}
             </Link>
           ))}
-          {one.seams.length > NAMED ? (
-            <span className="text-ash">and {one.seams.length - NAMED} more</span>
+          {deed.seams.length > NAMED ? (
+            <span className="text-ash">and {deed.seams.length - NAMED} more</span>
           ) : null}
         </li>
       ))}

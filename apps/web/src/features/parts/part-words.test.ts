@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { partState, partStateWord, tallyWords } from "./part-words.ts";
+import { partLook, partState, tallyWords } from "./part-words.ts";
 
 const tally = (fields: Partial<Parameters<typeof partState>[0]>) => ({
   total: 0,
@@ -22,8 +22,8 @@ describe("a part in words", () => {
   });
 
   it("is in work, not clear, while some seams are still planned", () => {
-    expect(partStateWord(tally({ total: 3, planned: 1, clear: 2 }))).toBe("In work");
-    expect(partStateWord(tally({ total: 1, accepted: 1 }))).toBeNull();
+    expect(partLook(tally({ total: 3, planned: 1, clear: 2 }))).toEqual({ tone: "plain", word: "In work" });
+    expect(partLook(tally({ total: 1, accepted: 1 }))).toEqual({ state: "accepted" });
   });
 
   it("counts its seams", () => {

@@ -15,9 +15,10 @@ export function partState(tally: Tally): StateName {
   return tally.planned === tally.total ? "planned" : "clear";
 }
 
-/** A part's state in words of its own where "clear" would say too much. */
-export function partStateWord(tally: Tally): string | null {
-  return partState(tally) === "clear" ? "In work" : null;
+/** How a part's state looks: as its seams' states do, but plainly "In work" where "clear" would say too much. */
+export function partLook(tally: Tally): { state: StateName } | { tone: "plain"; word: string } {
+  const state = partState(tally);
+  return state === "clear" ? { tone: "plain", word: "In work" } : { state };
 }
 
 /** `14 seams: 1 held, 9 accepted, 4 planned`. */
@@ -37,7 +38,9 @@ export function tallyWords(tally: Tally): string {
 
 /** A deed that the part waits for, with the seams it is for. */
 export interface Waiting {
-  readonly words: string;
+  /** For one seam and for several. */
+  readonly one: string;
+  readonly many: string;
   readonly tone: "stop" | "attend" | "plain";
   readonly seams: readonly SeamRow[];
 }
@@ -46,12 +49,17 @@ export interface Waiting {
 export function waitingFor(roll: readonly SeamRow[]): Waiting[] {
   const of = (...states: SeamRow["state"][]) => roll.filter((seam) => states.includes(seam.state));
   const all: Waiting[] = [
-    { words: "wait for the welding coordinator's decision", tone: "stop", seams: of("held") },
-    { words: "are to be repaired", tone: "stop", seams: of("rejected") },
-    { words: "are in repair", tone: "attend", seams: of("repair") },
-    { words: "are to be inspected", tone: "plain", seams: of("welded") },
-    { words: "may be welded", tone: "plain", seams: of("clear") },
-    { words: "are to be scanned", tone: "plain", seams: of("planned") },
+    {
+      one: "waits for the welding coordinator's decision",
+      many: "wait for the welding coordinator's decision",
+      tone: "stop",
+      seams: of("held"),
+    },
+    { one: "is to be repaired", many: "are to be repaired", tone: "stop", seams: of("rejected") },
+    { one: "is in repair", many: "are in repair", tone: "attend", seams: of("repair") },
+    { one: "is to be inspected", many: "are to be inspected", tone: "plain", seams: of("welded") },
+    { one: "may be welded", many: "may be welded", tone: "plain", seams: of("clear") },
+    { one: "is to be scanned", many: "are to be scanned", tone: "plain", seams: of("planned") },
   ];
   return all.filter((one) => one.seams.length > 0);
 }

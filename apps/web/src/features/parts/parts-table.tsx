@@ -5,7 +5,7 @@ import { StateMark } from "../../kit/states/state-mark.tsx";
 import type { Column } from "../../kit/tables/columns.ts";
 import { DataTable } from "../../kit/tables/data-table.tsx";
 import { InstantText } from "../../kit/units/instant-text.tsx";
-import { partState, partStateWord } from "./part-words.ts";
+import { partLook, partState } from "./part-words.ts";
 import { TallyBar } from "./tally-bar.tsx";
 
 const COLUMNS: readonly Column<Part>[] = [
@@ -31,17 +31,14 @@ const COLUMNS: readonly Column<Part>[] = [
     head: "Seams",
     value: (part) => part.seams.total,
     cell: (part) => <TallyBar tally={part.seams} />,
-    width: "16rem",
+    width: "24rem",
     wideOnly: true,
   },
   {
     id: "state",
     head: "State",
     value: (part) => partState(part.seams),
-    cell: (part) => {
-      const word = partStateWord(part.seams);
-      return <StateMark state={partState(part.seams)} {...(word !== null && { word })} />;
-    },
+    cell: (part) => <StateMark {...partLook(part.seams)} />,
     width: "8rem",
   },
   {

@@ -49,7 +49,7 @@ export function SignInForm(props: SignInFormProps): ReactElement {
   };
   return (
     <form ref={form} className="grid gap-5" onSubmit={(event) => void submit(event)}>
-      <TextField label="Name" name="login" value={login} onChange={setLogin} autoComplete="username" code />
+      <TextField label="Name" name="login" value={login} onChange={setLogin} autoComplete="username" />
       <PasswordField
         label="Password"
         name="password"

@@ -20,7 +20,7 @@ interface TableToolsProps<Row> {
 export function TableTools<Row>(props: TableToolsProps<Row>): ReactElement {
   const { fileName } = props;
   return (
-    <div className="screen-only mb-2 flex flex-wrap items-end justify-between gap-x-6 gap-y-2">
+    <div className="screen-only mb-2 flex flex-wrap items-end justify-between gap-x-6 gap-y-2 px-[1.125rem] pt-3">
       <div className="flex flex-wrap items-end gap-3">{props.filters}</div>
       <div className="-mr-4 flex items-center">
         <span className="mr-2 text-sm text-ash" aria-live="polite">
