@@ -24,6 +24,7 @@ export default defineConfig({
         test: {
           name: "browser",
           include: ["tests/browser/**/*.test.ts"],
+          globalSetup: "tests/browser/demo-shop.ts",
           testTimeout: 120_000,
           hookTimeout: 120_000,
           fileParallelism: false,

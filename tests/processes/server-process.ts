@@ -46,8 +46,8 @@ export async function runMain(
   if (code !== 0) throw new Error(`${args.join(" ")} ended with ${code}`);
 }
 
-async function answers(url: string, child: ChildProcess): Promise<void> {
-  for (let i = 0; i < 300; i += 1) {
+async function answers(url: string, child: ChildProcess, wait_s: number): Promise<void> {
+  for (let i = 0; i < wait_s * 10; i += 1) {
     if (child.exitCode !== null) throw new Error(`the server ended with ${child.exitCode}`);
     try {
       if ((await fetch(`${url}/health`)).ok) return;
@@ -57,17 +57,21 @@ async function answers(url: string, child: ChildProcess): Promise<void> {
     }
     await new Promise((resolve) => setTimeout(resolve, 100));
   }
-  throw new Error("the server did not answer within 30 s");
+  throw new Error(`the server did not answer within ${wait_s} s`);
 }
 
-/** Starts the server and waits until it answers. */
-export async function startProcess(dataDir: string, port: number): Promise<ServerProcess> {
-  const child = spawn(process.execPath, [MAIN], {
+/** Starts the server, with the demo shop if asked, and waits until it answers. */
+export async function startProcess(
+  dataDir: string,
+  port: number,
+  options: { readonly demo?: boolean } = {},
+): Promise<ServerProcess> {
+  const child = spawn(process.execPath, [MAIN, ...(options.demo === true ? ["--demo"] : [])], {
     env: environment(dataDir, port),
     stdio: ["ignore", "ignore", "inherit"],
   });
   const url = `http://127.0.0.1:${port}`;
-  await answers(url, child);
+  await answers(url, child, options.demo === true ? 180 : 30);
   return {
     url,
     kill: async () => {

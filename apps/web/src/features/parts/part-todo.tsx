@@ -30,7 +30,11 @@ export function PartTodo(props: { roll: readonly SeamRow[] }): ReactElement {
             {deed.seams.length} {deed.seams.length === 1 ? deed.one : deed.many}:
           </span>
           {deed.seams.slice(0, NAMED).map((seam) => (
-            <Link key={seam.id} to={pathTo("seam", { tag: seam.tag })} className="figures">
+            <Link
+              key={seam.id}
+              to={pathTo("seam", { tag: seam.tag })}
+              className="figures inline-block min-w-6 py-0.5 text-center"
+            >
               {seamNumber(seam.number, seam.attempt)}
             </Link>
           ))}

@@ -13,7 +13,7 @@ export interface EmptyStateProps {
 export function EmptyState(props: EmptyStateProps): ReactElement {
   return (
     <div className="rounded-sm border border-dashed border-edge px-5 py-6">
-      <h3 className="text-lg">{props.title}</h3>
+      <p className="font-title text-lg font-semibold">{props.title}</p>
       <div className="mt-1 max-w-prose text-ash">{props.children}</div>
       {props.action === undefined ? null : <div className="mt-4">{props.action}</div>}
     </div>
