@@ -38,7 +38,7 @@ export function WorstSeam(props: { roll: readonly SeamRow[] }): ReactElement | n
           <Reason tag={seam.tag} />
         </span>
       }
-      aside="the seam that uses most of its limits"
+      aside="the seam that needs somebody most"
     >
       <BeadStrip
         size="sheet"

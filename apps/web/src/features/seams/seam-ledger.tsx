@@ -11,7 +11,7 @@ import { seamQueries } from "./seams.queries.ts";
 
 const SHOWN_HASH = 16;
 
-/** The ledger's entries about a seam, for those who may read the ledger; else their numbers. */
+/** The ledger's entries about a part or seam, for those who may read the ledger; else their numbers. */
 export function SeamLedger(props: { tag: string; seqs: readonly number[] }): ReactElement {
   const may = useMay("ledger:read");
   const entries = useQuery({ ...seamQueries.ledger(props.tag), enabled: may });
@@ -38,7 +38,7 @@ export function SeamLedger(props: { tag: string; seqs: readonly number[] }): Rea
       ))}
       <li className="text-sm">
         <Link to={`${PATHS.records.path}?${new URLSearchParams({ subject: props.tag }).toString()}`}>
-          All entries about this seam
+          All entries about it
         </Link>
       </li>
     </ol>
