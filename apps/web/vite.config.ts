@@ -25,7 +25,8 @@ export default defineConfig({
         codeSplitting: {
           groups: [
             { name: "framework", test: FRAMEWORK },
-            { name: "schemas", test: /node_modules[\\/]zod[\\/]/ },
+            // With the policy's setting in the same file, no schema in any other file is made before it is set.
+            { name: "schemas", test: /node_modules[\\/]zod[\\/]|[\\/]app[\\/]content-policy\.ts$/ },
           ],
         },
       },

@@ -79,6 +79,32 @@ function onSide(series: Series, from: number, way: -1 | 1, pitch_mm: number): nu
   return side;
 }
 
+/** A slice this many standard uncertainties off the line of those before it begins another stretch. */
+const BREAK = 4;
+
+/** Whether a slice lies where the line through those before it leads; two are needed to lead anywhere. */
+function follows(sums: Sums, count: number, x: number, y: number, u: number): boolean {
+  if (count < 2) return true;
+  const there = shifted(sums, x);
+  const { value, u: u_line } = lineAtZero(there);
+  return Math.abs(y - value) <= BREAK * Math.hypot(u, u_line);
+}
+
+/** The sums about another origin, as far as a line needs them. */
+function shifted(sums: Sums, by: number): Sums {
+  const [w = 0, x = 0, xx = 0, , , y = 0, xy = 0] = sums;
+  const moved = noSums();
+  moved[0] = w;
+  moved[1] = x - by * w;
+  moved[2] = xx - 2 * by * x + by * by * w;
+  moved[5] = y;
+  moved[6] = xy - by * y;
+  return moved;
+}
+
+/** Any two slices lie on a line: a neighbour counts only where a third one lies on it too. */
+const confirmed = (kept: number) => (kept < 3 ? 1 : kept);
+
 /** How many slices of a side agree with one straight line through the place: the intersection of their intervals. */
 function agreeing(series: Series, side: readonly number[], x_mm: number): number {
   let low = Number.NEGATIVE_INFINITY;
@@ -88,8 +114,11 @@ function agreeing(series: Series, side: readonly number[], x_mm: number): number
   let used = 0;
   for (const width of WIDTHS) {
     while (used < Math.min(width, side.length)) {
-      const k = side[used++]!;
-      add(sums, series.at_mm[k]! - x_mm, series.values[k]!, series.u[k]!);
+      const k = side[used]!;
+      const [x, y, u] = [series.at_mm[k]! - x_mm, series.values[k]!, series.u[k]!];
+      if (!follows(sums, used, x, y, u)) return confirmed(kept);
+      add(sums, x, y, u);
+      used += 1;
     }
     const { value, u } = lineAtZero(sums);
     low = Math.max(low, value - AGREEMENT * u);
@@ -98,7 +127,7 @@ function agreeing(series: Series, side: readonly number[], x_mm: number): number
     kept = used;
     if (used === side.length) break;
   }
-  return kept;
+  return confirmed(kept);
 }
 
 /** Slices needed on each side before a parabola is drawn through them. */

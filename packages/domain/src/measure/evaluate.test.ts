@@ -1,0 +1,192 @@
+import { describe, expect, it } from "vitest";
+import type { ScanResult } from "../schemas/scan-result.ts";
+import { parseSeamModel, type SeamModel } from "../schemas/seam-model.ts";
+import { evaluateScan } from "./evaluate.ts";
+import { rotationOf, turned, type Vector } from "./result/rotation.ts";
+import type { ScanCloud } from "./scan-cloud.ts";
+import { cloudOf, scanOfT, straightModel } from "./testing/models.ts";
+
+const model = straightModel(60, 2);
+
+function evaluated(of: SeamModel, cloud: ScanCloud): ScanResult {
+  const outcome = evaluateScan(of, cloud);
+  if (!outcome.ok) throw new Error(JSON.stringify(outcome.faults));
+  return outcome.value;
+}
+
+const points = (cloud: ScanCloud): Vector[] =>
+  Array.from({ length: cloud.count }, (_, k) => [
+    cloud.xyz_mm[3 * k] ?? 0,
+    cloud.xyz_mm[3 * k + 1] ?? 0,
+    cloud.xyz_mm[3 * k + 2] ?? 0,
+  ]);
+
+const mapped = (cloud: ScanCloud, to: (p: Vector) => Vector): ScanCloud => ({
+  ...cloud,
+  xyz_mm: Float64Array.from(points(cloud).flatMap((p) => [...to(p)])),
+});
+
+/** A model moved as a whole, or mirrored. */
+function modelMapped(
+  of: SeamModel,
+  point: (p: Vector) => Vector,
+  direction: (v: Vector) => Vector,
+): SeamModel {
+  const parsed = parseSeamModel({
+    ...of,
+    seam: {
+      ...of.seam,
+      vertices: of.seam.vertices.map((vertex) => ({
+        ...vertex,
+        point: point(vertex.point),
+        tangent: direction(vertex.tangent),
+        lateral: direction(vertex.lateral),
+        normal: direction(vertex.normal),
+      })),
+    },
+  });
+  if (!parsed.ok) throw new Error(JSON.stringify(parsed.faults));
+  return parsed.value;
+}
+
+const laterals = (result: ScanResult) => result.stations.map((station) => station.lateral_mm ?? Number.NaN);
+
+function expectSame(one: readonly number[], other: readonly number[], within: number): void {
+  expect(one.length).toBe(other.length);
+  for (const [i, value] of one.entries())
+    expect(Math.abs(value - (other[i] ?? Number.NaN))).toBeLessThan(within);
+}
+
+describe("a clean scan", () => {
+  const scan = scanOfT(60, { lateral_mm: (x) => 0.8 + 0.01 * x });
+  const result = evaluated(model, scan);
+
+  it("gives the deviation at every station, to hundredths of a millimetre", () => {
+    expect(result.coverage.share).toBe(1);
+    expectSame(
+      laterals(result),
+      model.seam.vertices.map(({ station_mm }) => 0.8 + 0.01 * station_mm),
+      0.02,
+    );
+    expect(result.verdict).toBe("adapt");
+  });
+
+  it("gives the same for the same scan moved with its model", () => {
+    const turn = rotationOf([0.4, -0.7, 0.2]);
+    const move = (p: Vector): Vector => {
+      const [x, y, z] = turned(turn, p);
+      return [x + 300, y - 120, z + 55];
+    };
+    const moved = modelMapped(model, move, (v) => turned(turn, v));
+    expectSame(laterals(evaluated(moved, mapped(scan, move))), laterals(result), 2e-3);
+  });
+
+  it("mirrors its signs when scan and model are mirrored", () => {
+    const mirror = ([x, y, z]: Vector): Vector => [x, -y, z];
+    // The lateral axis is left as it was: the upright now stands on its other side.
+    const mirrored = modelMapped(model, mirror, mirror);
+    expectSame(laterals(evaluated(mirrored, mapped(scan, mirror))), laterals(result), 2e-3);
+    const worldY = evaluated(mirrored, mapped(scan, mirror)).stations.map(
+      (s) => s.root_mm?.[1] ?? Number.NaN,
+    );
+    expectSame(
+      worldY,
+      result.stations.map((s) => -(s.root_mm?.[1] ?? Number.NaN)),
+      2e-3,
+    );
+  });
+
+  it("does not depend on the order of the profiles", () => {
+    const all = points(scan);
+    const order = all.map((_, k) => k).sort((a, b) => (scan.profiles?.[b] ?? 0) - (scan.profiles?.[a] ?? 0));
+    const shuffled = cloudOf(
+      order.map((k) => all[k] ?? [0, 0, 0]),
+      order.map((k) => scan.profiles?.[k] ?? 0),
+    );
+    expectSame(laterals(evaluated(model, shuffled)), laterals(result), 5e-3);
+  });
+
+  it("does not change with points far from the seam", () => {
+    const more = cloudOf([
+      ...points(scan),
+      ...Array.from({ length: 500 }, (_, i): Vector => [i / 10, 90, 40]),
+    ]);
+    expectSame(
+      laterals(evaluated(model, more)),
+      laterals(evaluated(model, { ...scan, profiles: null })),
+      1e-9,
+    );
+  });
+
+  it("states more uncertainty for a noisier scan", () => {
+    const noisier = mapped(scan, ([x, y, z]) => [
+      x,
+      y + 0.05 * Math.sin(91 * z + x),
+      z + 0.05 * Math.sin(77 * y + x),
+    ]);
+    const u = (of: ScanResult) => Math.max(...of.stations.map((station) => station.u_lateral_mm ?? 0));
+    expect(u(evaluated(model, noisier))).toBeGreaterThan(u(result));
+  });
+});
+
+describe("a step of the joint", () => {
+  it("stays a step: the smoothing ends at it on both sides", () => {
+    const result = evaluated(model, scanOfT(60, { lateral_mm: (x) => (x < 30.5 ? 0 : 0.5) }));
+    for (const { station_mm, lateral_mm, measured } of result.stations)
+      if (measured) expect(lateral_mm).toBeCloseTo(station_mm < 30.5 ? 0 : 0.5, 1);
+  });
+});
+
+describe("bad geometry never gives a number", () => {
+  const scattered = cloudOf(
+    Array.from(
+      { length: 4000 },
+      (_, i): Vector => [
+        60 * Math.abs(Math.sin(i * 12.9898)),
+        30 * Math.sin(i * 78.233),
+        30 * Math.sin(i * 37.719),
+      ],
+    ),
+  );
+  it.each([
+    ["no point near the seam", cloudOf(Array.from({ length: 500 }, (_, i): Vector => [i / 10, 500, 500]))],
+    ["plate B missing", scanOfT(60, { only: "a" })],
+    ["plate A missing", scanOfT(60, { only: "b" })],
+    ["all points on one line", cloudOf(Array.from({ length: 900 }, (_, i): Vector => [i / 15, -3, 0]))],
+    ["points without order", scattered],
+    ["one point", cloudOf([[1, 0, 0]])],
+  ])("%s: hold, with the reason, and no station measured", (_name, cloud) => {
+    const result = evaluated(model, cloud);
+    expect(result.verdict).toBe("hold");
+    expect(result.reasons.some((reason) => reason.check === "coverage")).toBe(true);
+    for (const station of result.stations) {
+      expect(station.measured).toBe(false);
+      expect(station.lateral_mm).toBeUndefined();
+      expect(station.why).toBeDefined();
+    }
+    expect(result.summary.lateral_mm).toBeUndefined();
+    expect(result.rigid.unobservable).toEqual(["all"]);
+  });
+
+  it("half a scan: the other half is blind, not guessed", () => {
+    const all = points(scanOfT(60));
+    const half = cloudOf(all.filter(([x]) => x <= 30));
+    const result = evaluated(model, half);
+    expect(result.verdict).toBe("hold");
+    expect(
+      result.stations.filter((station) => station.station_mm > 32).every((station) => !station.measured),
+    ).toBe(true);
+    expect(result.coverage.longest_blind_mm).toBeGreaterThanOrEqual(28);
+  });
+
+  it.each([
+    ["inches", 1 / 25.4],
+    ["metres", 1 / 1000],
+  ])("a scan in %s that was declared as mm is refused", (_name, factor) => {
+    const outcome = evaluateScan(
+      model,
+      mapped(scanOfT(60), ([x, y, z]) => [x * factor, y * factor, z * factor]),
+    );
+    expect(outcome.ok ? [] : outcome.faults.map((fault) => fault.code)).toEqual(["scan-units-implausible"]);
+  });
+});
