@@ -9,6 +9,8 @@ type Vector = readonly [number, number, number];
 export interface SeamFrames {
   readonly count: number;
   readonly closed: boolean;
+  /** Length of the nominal line, mm. */
+  readonly length_mm: number;
   /** True when all frames are the same and the points lie on one line. */
   readonly straight: boolean;
   readonly stations_mm: Float64Array;
@@ -110,7 +112,7 @@ const ownFrames = (model: SeamModel) =>
 /** Frames along the nominal line, at the model's own vertices: what points are placed by. */
 export function lineFrames(model: SeamModel): SeamFrames {
   const closed = model.seam.closed ?? false;
-  return flat(withoutRepeat(ownFrames(model), closed), closed);
+  return flat(withoutRepeat(ownFrames(model), closed), { closed, length_mm: model.seam.length_mm });
 }
 
 /**
@@ -121,15 +123,19 @@ export function lineFrames(model: SeamModel): SeamFrames {
 export function stationFrames(model: SeamModel, step_mm?: number): SeamFrames {
   if (step_mm !== undefined && !(step_mm > 0)) throw new RangeError(`step_mm: expected > 0, got ${step_mm}`);
   const frames = step_mm === undefined ? ownFrames(model) : everyStep(model.seam.vertices, step_mm);
-  return flat(frames, model.seam.closed ?? false);
+  return flat(frames, { closed: model.seam.closed ?? false, length_mm: model.seam.length_mm });
 }
 
-function flat(frames: readonly Frame[], closed: boolean): SeamFrames {
+function flat(
+  frames: readonly Frame[],
+  { closed, length_mm }: { readonly closed: boolean; readonly length_mm: number },
+): SeamFrames {
   const vectors = (key: "point" | "tangent" | "lateral" | "normal") =>
     Float64Array.from(frames.flatMap((frame) => frame[key]));
   return {
     count: frames.length,
     closed,
+    length_mm,
     straight: !closed && isStraight(frames),
     stations_mm: Float64Array.from(frames, (frame) => frame.station_mm),
     points_mm: vectors("point"),

@@ -10,8 +10,10 @@ export const RUN_OFF_MM = 15;
 /** The points of a scan near a seam, in the order of the scan. */
 export interface SectionPoints {
   readonly count: number;
-  /** Place along the seam, mm; below 0 and beyond the length where the scan runs past the ends. */
+  /** Place along the seam, mm; below 0 and beyond the length where the scan runs past the ends of an open one. */
   readonly s_mm: Float64Array;
+  /** Length of a closed seam, after which its places begin anew; 0 for an open one. */
+  readonly period_mm: number;
   readonly l_mm: Float64Array;
   readonly n_mm: Float64Array;
   /** Profile of each point, or null for a plain cloud. */
@@ -112,7 +114,8 @@ export function sectionPoints(frames: SeamFrames, cloud: ScanCloud): SectionPoin
   const { count } = cloud;
   const { points_mm: p, tangents: t, laterals: l, normals: m, stations_mm } = frames;
   const find: Finder = frames.straight ? () => 0 : stationFinder(frames);
-  const last_mm = stations_mm[frames.count - 1]!;
+  const period_mm = frames.closed ? frames.length_mm : 0;
+  const last_mm = frames.closed ? frames.length_mm : stations_mm[frames.count - 1]!;
   const s_mm = new Float64Array(count);
   const l_mm = new Float64Array(count);
   const n_mm = new Float64Array(count);
@@ -132,7 +135,8 @@ export function sectionPoints(frames: SeamFrames, cloud: ScanCloud): SectionPoin
     at[2] = dx * m[3 * i]! + dy * m[3 * i + 1]! + dz * m[3 * i + 2]!;
     if (!(Math.abs(at[1]) <= REACH_MM && Math.abs(at[2]) <= REACH_MM)) continue;
     if (!frames.straight) unbend(frames, i, at, x, y, z);
-    const s = stations_mm[i]! + at[0];
+    const along = stations_mm[i]! + at[0];
+    const s = period_mm > 0 ? along - period_mm * Math.floor(along / period_mm) : along;
     if (!(s >= stations_mm[0]! - RUN_OFF_MM && s <= last_mm + RUN_OFF_MM)) continue;
     s_mm[kept] = s;
     l_mm[kept] = at[1];
@@ -142,6 +146,7 @@ export function sectionPoints(frames: SeamFrames, cloud: ScanCloud): SectionPoin
   }
   return {
     count: kept,
+    period_mm,
     s_mm: s_mm.subarray(0, kept),
     l_mm: l_mm.subarray(0, kept),
     n_mm: n_mm.subarray(0, kept),

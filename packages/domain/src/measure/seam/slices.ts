@@ -24,24 +24,42 @@ export interface Slices {
   readonly pitch_mm: number;
 }
 
+/** A place on a closed seam as the copy of it nearest to another; on an open one the place itself. */
+const copyNear = (s_mm: number, to_mm: number, period_mm: number): number =>
+  period_mm > 0 ? s_mm + period_mm * Math.round((to_mm - s_mm) / period_mm) : s_mm;
+
+/** Mean place of each group of points, on the seam itself. */
+function meansOf(points: SectionPoints, groups: Int32Array, count: number) {
+  const { period_mm } = points;
+  const firsts = new Float64Array(count).fill(Number.NaN);
+  const sums = new Float64Array(count);
+  const sizes = new Int32Array(count);
+  for (let k = 0; k < points.count; k++) {
+    const group = groups[k]!;
+    if (sizes[group] === 0) firsts[group] = points.s_mm[k]!;
+    sums[group]! += copyNear(points.s_mm[k]!, firsts[group]!, period_mm);
+    sizes[group]! += 1;
+  }
+  const means_mm = sums.map((sum, group) => {
+    const mean = sum / sizes[group]!;
+    return period_mm > 0 ? mean - period_mm * Math.floor(mean / period_mm) : mean;
+  });
+  return { means_mm, sizes };
+}
+
 /** Profiles by their mean place, neighbours closer than the finest pitch joined. */
 function slicesOfProfiles(points: SectionPoints, profiles: Int32Array): Int32Array {
   let most = 0;
   for (const profile of profiles) most = Math.max(most, profile);
-  const sums = new Float64Array(most + 1);
-  const counts = new Int32Array(most + 1);
-  for (let k = 0; k < points.count; k++) {
-    sums[profiles[k]!]! += points.s_mm[k]!;
-    counts[profiles[k]!]! += 1;
-  }
-  const order = Array.from(counts.keys())
-    .filter((profile) => counts[profile]! > 0)
-    .sort((a, b) => sums[a]! / counts[a]! - sums[b]! / counts[b]!);
+  const { means_mm, sizes } = meansOf(points, profiles, most + 1);
+  const order = Array.from(sizes.keys())
+    .filter((profile) => sizes[profile]! > 0)
+    .sort((a, b) => means_mm[a]! - means_mm[b]!);
   const groups = new Int32Array(most + 1);
   let group = -1;
   let begun_mm = Number.NEGATIVE_INFINITY;
   for (const profile of order) {
-    const at_mm = sums[profile]! / counts[profile]!;
+    const at_mm = means_mm[profile]!;
     if (at_mm - begun_mm >= FINEST_PITCH_MM * 0.999) {
       group += 1;
       begun_mm = at_mm;
@@ -116,12 +134,7 @@ export function slicesOf(points: SectionPoints): Slices {
 function sorted(points: SectionPoints, groups: Int32Array): Slices {
   let most = 0;
   for (const group of groups) if (group > most) most = group;
-  const sizes = new Int32Array(most + 1);
-  const sums = new Float64Array(most + 1);
-  for (let k = 0; k < points.count; k++) {
-    sizes[groups[k]!]! += 1;
-    sums[groups[k]!]! += points.s_mm[k]!;
-  }
+  const { means_mm, sizes } = meansOf(points, groups, most + 1);
   const present = Array.from(sizes.keys()).filter((group) => sizes[group]! > 0);
   const rank = new Int32Array(most + 1);
   const starts = new Int32Array(present.length + 1);
@@ -139,7 +152,7 @@ function sorted(points: SectionPoints, groups: Int32Array): Slices {
     l_mm[to] = points.l_mm[k]!;
     n_mm[to] = points.n_mm[k]!;
   }
-  const at_mm = Float64Array.from(present, (group) => sums[group]! / sizes[group]!);
+  const at_mm = Float64Array.from(present, (group) => means_mm[group]!);
   const steps = at_mm.slice(1).map((at, i) => at - at_mm[i]!);
   return {
     count: present.length,

@@ -1,0 +1,73 @@
+import { readFileSync } from "node:fs";
+import fc from "fast-check";
+import { describe, expect, it } from "vitest";
+import { type Matrix, product, rotationOf, type Vector, vectorOf } from "./rotation.ts";
+import { solveDetermined, symmetricEigen } from "./symmetric-solve.ts";
+
+const DEG = 180 / Math.PI;
+const near = (a: Matrix, b: readonly (readonly number[])[], digits: number) => {
+  for (const [i, row] of a.entries())
+    for (const [j, x] of row.entries()) expect(x).toBeCloseTo(b[i]?.[j] ?? Number.NaN, digits);
+};
+
+interface Golden {
+  readonly rigid: readonly {
+    readonly id: string;
+    readonly expected: {
+      readonly R?: readonly (readonly number[])[];
+      readonly rotation_vector_deg?: readonly number[];
+    };
+  }[];
+}
+const golden: Golden = JSON.parse(
+  readFileSync(new URL("../../../vectors/geometry/registration.json", import.meta.url), "utf8"),
+);
+
+describe("rotation vector and matrix", () => {
+  it.each(golden.rigid.filter(({ expected }) => expected.rotation_vector_deg && expected.R))(
+    "agree with scipy: $id",
+    ({ id, expected }) => {
+      const [x = 0, y = 0, z = 0] = expected.rotation_vector_deg ?? [];
+      near(rotationOf([x / DEG, y / DEG, z / DEG]), expected.R ?? [], 9);
+      // Half a turn may be told about either of two opposite axes.
+      if (id !== "half-turn")
+        for (const [k, angle] of vectorOf(expected.R as unknown as Matrix).entries())
+          expect(angle * DEG).toBeCloseTo([x, y, z][k] ?? 0, 6);
+    },
+  );
+
+  it("come back from each other, and turns one after the other add about one axis", () => {
+    const part = fc.double({ min: -1.5, max: 1.5, noNaN: true });
+    fc.assert(
+      fc.property(part, part, part, (x, y, z) => {
+        const v: Vector = [x, y, z];
+        for (const [k, value] of vectorOf(rotationOf(v)).entries()) expect(value).toBeCloseTo(v[k] ?? 0, 8);
+        near(product(rotationOf(v), rotationOf(v)), rotationOf([2 * x, 2 * y, 2 * z]), 9);
+      }),
+    );
+  });
+});
+
+describe("symmetric matrices", () => {
+  it("have the eigenvalues of the second difference matrix: 2 - 2 cos(kπ/5)", () => {
+    const matrix = Array.from({ length: 4 }, (_, i) =>
+      Array.from({ length: 4 }, (__, j) => (i === j ? 2 : Math.abs(i - j) === 1 ? -1 : 0)),
+    );
+    const values = [...symmetricEigen(matrix).values].sort((a, b) => a - b);
+    for (const [k, value] of values.entries())
+      expect(value).toBeCloseTo(2 - 2 * Math.cos(((k + 1) * Math.PI) / 5), 12);
+  });
+
+  it("are solved with the least norm, and what they leave free is named", () => {
+    const { x, free } = solveDetermined(
+      [
+        [2, 0],
+        [0, 0],
+      ],
+      [4, 0],
+      1e-9,
+    );
+    expect(x).toEqual([2, 0]);
+    expect(free.map((direction) => direction.map(Math.abs))).toEqual([[0, 1]]);
+  });
+});
