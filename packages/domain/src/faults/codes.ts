@@ -94,6 +94,12 @@ export const FAULT_KINDS = {
     "Give the poses file, or a cloud in the part frame.",
   ),
   "scan-pose-invalid": kind(422, 2, "A pose is not valid", "A pose needs a point and a unit quaternion."),
+  "registration-undetermined": kind(
+    422,
+    2,
+    "The scan's place on the part is not determined",
+    "Give at least three datum points that are not on one line.",
+  ),
   "model-invalid": kind(422, 2, "The model cannot be used", "Compare it with docs/formats/model.md."),
   // Pass logs
   "log-clock-reset": kind(

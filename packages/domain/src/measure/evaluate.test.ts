@@ -129,6 +129,45 @@ describe("a clean scan", () => {
   });
 });
 
+describe("a scan in another frame", () => {
+  const scan = scanOfT(60);
+  const turn = rotationOf([0.01, -0.006, 0.02]);
+  const away = (p: Vector): Vector => {
+    const [x, y, z] = turned(turn, p);
+    return [x + 1.2, y - 0.8, z + 0.5];
+  };
+  const off = mapped(scan, away);
+
+  it("is brought back by datum points, their error told", () => {
+    const places: Vector[] = [
+      [0, -40, 0],
+      [80, -40, 0],
+      [80, 60, 10],
+      [0, 60, 30],
+    ];
+    const datums = places.map((nominal) => ({ nominal, measured: away(nominal) }));
+    const outcome = evaluateScan(model, off, { registering: { by: "datums", datums } });
+    if (!outcome.ok) throw new Error(JSON.stringify(outcome.faults));
+    expectSame(laterals(outcome.value), laterals(evaluated(model, scan)), 2e-3);
+    expect(outcome.value.registration).toMatchObject({ by: "datums", free: [] });
+    expect(outcome.value.registration?.rms_mm).toBeLessThan(1e-9);
+  });
+
+  it("is brought back by its own plates, but for the slide along the seam", () => {
+    const outcome = evaluateScan(model, off, { registering: { by: "plates" } });
+    if (!outcome.ok) throw new Error(JSON.stringify(outcome.faults));
+    expect(outcome.value.registration).toMatchObject({ by: "plates", free: ["along_seam"] });
+    for (const station of outcome.value.stations)
+      if (station.measured) expect(Math.abs(station.lateral_mm ?? 9)).toBeLessThan(0.03);
+  });
+
+  it("is refused with datum points on one line", () => {
+    const datums = [0, 1, 2].map((i) => ({ nominal: [i, 0, 0] as const, measured: [i, 0, 0] as const }));
+    const outcome = evaluateScan(model, off, { registering: { by: "datums", datums } });
+    expect(outcome.ok ? "" : outcome.faults[0]?.code).toBe("registration-undetermined");
+  });
+});
+
 describe("a step of the joint", () => {
   it("stays a step: the smoothing ends at it on both sides", () => {
     const result = evaluated(model, scanOfT(60, { lateral_mm: (x) => (x < 30.5 ? 0 : 0.5) }));

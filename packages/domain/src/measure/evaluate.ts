@@ -3,6 +3,7 @@ import type { ScanResult } from "../schemas/scan-result.ts";
 import type { SeamModel } from "../schemas/seam-model.ts";
 import { jointSeries } from "./along/joint-series.ts";
 import { judgeScan } from "./judge/judge-scan.ts";
+import { type Registering, registerScan } from "./register/register-scan.ts";
 import { endsOf } from "./result/ends.ts";
 import { remainingPart } from "./result/remaining.ts";
 import { rigidPart } from "./result/rigid.ts";
@@ -23,6 +24,8 @@ export interface EvaluateOptions {
   readonly step_mm?: number;
   /** Half-width of the scanner's stated accuracy, mm, ≥ 0; absent: not known, and said so in the warnings. */
   readonly scanner_accuracy_mm?: number;
+  /** How the scan is brought into the part frame; absent: it comes in it. */
+  readonly registering?: Registering;
 }
 
 /** A scan is looked at for a mistaken unit only where less than this share of its stations was measured. */
@@ -56,13 +59,17 @@ export function evaluateScan(
   cloud: ScanCloud,
   options: EvaluateOptions = {},
 ): Outcome<ScanResult> {
+  const registered = options.registering && registerScan(model, cloud, options.registering);
+  if (registered && !registered.ok) return registered;
+  const placed = registered ? registered.value.cloud : cloud;
   const frames = stationFrames(model, options.step_mm);
-  const seam = measureSeam(model, cloud);
+  const seam = measureSeam(model, placed);
   const along = jointSeries(seam);
   const scanner_accuracy_mm = options.scanner_accuracy_mm ?? 0;
-  const stations = stationResults({ seam, along, frames, scanner_accuracy_mm });
+  const u_registration_mm = registered?.value.report.u_mm ?? 0;
+  const stations = stationResults({ seam, along, frames, scanner_accuracy_mm, u_registration_mm });
   const coverage = coverageOf(stations);
-  const mistake = coverage.share < SUSPECT_SHARE ? unitMistake(model, seam.joint, cloud) : null;
+  const mistake = coverage.share < SUSPECT_SHARE ? unitMistake(model, seam.joint, placed) : null;
   if (mistake) return refused({ code: "scan-units-implausible", detail: mistake });
   const rigid = rigidPart(stations, frames);
   return good({
@@ -78,6 +85,7 @@ export function evaluateScan(
     ends: endsOf(seam),
     rigid: rigid?.report ?? NO_MOTION,
     ...(rigid && { remaining: remainingPart(stations, frames, rigid.motion) }),
+    ...(registered && { registration: registered.value.report }),
     summary: summaryOf(stations),
     stations,
   });

@@ -197,6 +197,23 @@ export const ScanResult = z
       })
       .optional()
       .meta({ description: "What remains when the rigid part is taken out" }),
+    registration: z
+      .strictObject({
+        by: z.enum(["datums", "plates"]).meta({ description: "What the scan was placed by" }),
+        translation_mm: triple("Translation from the scan's frame to the part's, mm", [0.4, -1.2, 0]),
+        rotation_deg: triple("Rotation vector of the same, degrees", [0, 0, 0.3]),
+        rms_mm: lengthMm("What is left at the datum points or plates, root mean square", 0.03).min(0),
+        condition: z.number().min(0).max(1).meta({
+          description: "How well the pose is determined: 0 not at all, 1 as well as can be",
+          example: 0.4,
+        }),
+        u_mm: lengthMm("Standard uncertainty that it leaves at the seam, each axis", 0.015).min(0),
+        free: z
+          .array(z.string())
+          .meta({ description: "What it leaves undetermined", example: ["along_seam"] }),
+      })
+      .optional()
+      .meta({ description: "How the scan was brought into the part frame; absent where it came in it" }),
     summary: ScanSummary,
     stations: z.array(StationResult).meta({ description: "One entry a station, in growing order" }),
   })

@@ -23,6 +23,8 @@ export interface StationInput {
   readonly frames: SeamFrames;
   /** Half-width of the scanner's stated accuracy, mm; 0 where none is stated. */
   readonly scanner_accuracy_mm: number;
+  /** Standard uncertainty that registration leaves at the seam, each axis, mm; 0 where there was none. */
+  readonly u_registration_mm: number;
 }
 
 function nearestSlice(at_mm: Float64Array, s_mm: number): number {
@@ -87,7 +89,7 @@ function measuredStation(input: StationInput, j: number, slice: number, result: 
       ? adaptiveLine(along.series[quantity], slice, s_mm, seam.slices.pitch_mm)
       : { value: Number.NaN, u: Number.NaN };
   // A stated accuracy is a bound (rectangular, JCGM 100 4.3.7) and the same all along one scan: it never averages out.
-  const common_mm = Math.hypot(input.scanner_accuracy_mm / Math.sqrt(3), LEAST_U_MM);
+  const common_mm = Math.hypot(input.scanner_accuracy_mm / Math.sqrt(3), input.u_registration_mm, LEAST_U_MM);
   const [lateral, normal, angle] = [estimate("lateral"), estimate("normal"), estimate("angle")];
   const root = toPart(frames, j, lateral.value, normal.value);
   return {
