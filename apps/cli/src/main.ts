@@ -30,6 +30,12 @@ const positive = (text: string): number => {
   return value;
 };
 
+const aStep = (text: string): number => {
+  const value = positive(text);
+  if (value < 0.05) throw new InvalidArgumentError(`Expected 0.05 or more, got "${text}".`);
+  return value;
+};
+
 const json = (): Option => new Option("--json", "print one JSON value on stdout and nothing else");
 const units = (): Option =>
   new Option("--units <unit>", "unit that the scan and its poses are written in")
@@ -49,8 +55,11 @@ program
   .requiredOption(...scan)
   .option(...poses)
   .addOption(units())
-  .option("--step <mm>", "results every so many mm instead of at the model's stations", positive)
+  .option("--step <mm>", "results every so many mm, 0.05 or more, not at the model's stations", aStep)
   .option("--accuracy <mm>", "the scanner's stated accuracy, as a bound", positive)
+  .option("--datum <file>", "datum points that bring the scan into the part frame, JSON")
+  .option("--by-plates", "bring the scan into the part frame by its own plates")
+  .option("--path <file>", "write the corrected path: .csv, or .json")
   .addOption(json())
   .addHelpText(
     "after",
@@ -58,7 +67,11 @@ program
 Exit: 0 within or adapt, 10 hold, 2 unreadable input
 
   beadroll evaluate --model nominal.json --scan profiles.csv
-  beadroll evaluate --model nominal.json --scan cloud.ply --json | jq .verdict`,
+  beadroll evaluate --model nominal.json --scan cloud.ply --json | jq .verdict
+  beadroll evaluate --model nominal.json --scan cloud.ply --datum datum.json --path path.csv
+
+datum.json: [{"nominal": [x, y, z], "measured": [x, y, z]}, …], at least three, mm.
+The path is advice for the welding coordinator, no command to a robot.`,
   )
   .action((options) =>
     runVerb(

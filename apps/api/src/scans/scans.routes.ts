@@ -1,8 +1,11 @@
+import { Readable } from "node:stream";
 import * as contracts from "@beadroll/domain/contract/seams.contract";
+import { pathCsv } from "@beadroll/domain/measure/path/corrected-path";
 import { z } from "zod";
 import { changeContext, type Deps } from "../deps.ts";
 import { refusal } from "../http/refusal.ts";
 import { type Route, route } from "../http/route.ts";
+import { readCorrectedPath, readFillAdvice } from "./scan-advice.ts";
 import { readScanPage } from "./scans.read.ts";
 import { readSection, recordScan } from "./scans.service.ts";
 
@@ -23,6 +26,17 @@ export function scanRoutes(deps: Deps): Route[] {
       (remembered) => readScanPage(reader, Remembered.parse(remembered).scan_id),
     ),
     route(contracts.getScan, ({ params }) => readScanPage(reader, params.id)),
+    route(contracts.getCorrectedPath, ({ params }) => readCorrectedPath(reader, params.id)),
+    route(contracts.getCorrectedPathCsv, async ({ params }) => {
+      const path = await readCorrectedPath(reader, params.id);
+      return {
+        stream: Readable.from([pathCsv(path)]),
+        media_type: "text/csv",
+        file_name: `path-${params.id}.csv`,
+        inline: false,
+      };
+    }),
+    route(contracts.getFillAdvice, ({ params }) => readFillAdvice(reader, params.id)),
     route(contracts.getSection, ({ params, query }) => readSection(deps, params.id, query.station_mm)),
   ];
 }

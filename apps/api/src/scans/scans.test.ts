@@ -50,6 +50,31 @@ const rows = async () => ({
   entries: (await server.deps.db.reader("ledger_entries")).length,
 });
 
+describe("advice from a scan", () => {
+  it("is the corrected path as JSON and CSV, and the fill under the seam's procedure", async () => {
+    const pushed = await push(seamTag(8));
+    expect(pushed.status).toBe(201);
+    const get = (what: string) =>
+      server.http.get(`/api/v1/scans/${pushed.body.id}/${what}`).set("Authorization", reader);
+    const path = await get("path");
+    expect([path.status, path.body.frame, path.body.verdict]).toEqual([200, "part", pushed.body.verdict]);
+    const measured = pushed.body.result.stations.filter((station: { measured: boolean }) => station.measured);
+    expect(path.body.points).toHaveLength(measured.length);
+    expect(path.body.notice).toMatch(/no command to a robot/);
+    const csv = await get("path.csv");
+    expect([csv.status, csv.headers["content-type"]]).toEqual([200, expect.stringMatching(/^text\/csv/)]);
+    expect(csv.text.trimEnd().split("\n")).toHaveLength(measured.length + 2);
+    const fill = await get("fill");
+    expect(fill.status).toBe(200);
+    expect(fill.body.nominal_area_mm2).toBeGreaterThan(0);
+    expect(fill.body.stations.length).toBeGreaterThan(0);
+    expect(fill.body.notice).toMatch(/never a command/);
+    const unknown = "0193782a-5c1e-7c3a-9d52-6b1f0e4c8a77";
+    const none = await server.http.get(`/api/v1/scans/${unknown}/path`).set("Authorization", reader);
+    expect(none.status).toBe(404);
+  });
+});
+
 describe("a scan that is pushed", () => {
   it("is measured, judged and linked to its seam", async () => {
     const answer = await push(seamTag(0), { fields: { part_tag: part.tag } });

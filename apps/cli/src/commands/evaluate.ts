@@ -1,17 +1,43 @@
+import { writeFile } from "node:fs/promises";
 import { evaluateScan } from "@beadroll/domain/measure/evaluate";
+import { correctedPath, pathCsv } from "@beadroll/domain/measure/path/corrected-path";
+import type { Registering } from "@beadroll/domain/measure/register/register-scan";
+import type { ScanResult } from "@beadroll/domain/schemas/scan-result";
+import type { SeamModel } from "@beadroll/domain/schemas/seam-model";
 import { EXIT } from "../exit-codes.ts";
+import { readDatums } from "../input/read-datums.ts";
 import { readModel } from "../input/read-model.ts";
 import { readPoints, readScanFiles, type ScanOptions } from "../input/scan-files.ts";
 import { evaluationText } from "../output/evaluation-text.ts";
 import { stopOnFaults } from "../output/fault-text.ts";
 import type { Look } from "../output/look.ts";
-import type { CommandOutcome } from "../output/outcome.ts";
+import { type CommandOutcome, stop } from "../output/outcome.ts";
 
 /** Options of `evaluate`, as parsed. */
 export interface EvaluateOptions extends ScanOptions {
   readonly model: string;
   readonly step?: number;
   readonly accuracy?: number;
+  readonly datum?: string;
+  readonly byPlates?: boolean;
+  readonly path?: string;
+}
+
+/** How the scan is brought into the part frame, if it must be. */
+async function registeringOf({ datum, byPlates }: EvaluateOptions): Promise<Registering | null> {
+  if (datum !== undefined && byPlates === true)
+    return stop(EXIT.usage, { error: "usage", detail: "--datum and --by-plates: give one of them" });
+  if (datum !== undefined) return { by: "datums", datums: await readDatums(datum) };
+  return byPlates === true ? { by: "plates" } : null;
+}
+
+/** Writes the corrected path as the name's ending says. */
+async function writePath(file: string, model: SeamModel, result: ScanResult, step?: number): Promise<string> {
+  const path = correctedPath(model, result, step);
+  const isCsv = /\.csv$/i.test(file);
+  await writeFile(file, isCsv ? pathCsv(path) : `${JSON.stringify(path, null, 2)}\n`);
+  const gaps = path.complete ? "" : ", with gaps where nothing was measured";
+  return `Corrected path of ${path.points.length} points written to ${file}${gaps}`;
 }
 
 /** Measures a scan against its model, without a server. */
@@ -21,16 +47,20 @@ export async function evaluate(options: EvaluateOptions, look: Look): Promise<Co
   const paths = poses === null ? [scan.path] : [scan.path, poses.path];
   const cloud = readPoints(scan, poses, options.units);
   if (!cloud.ok) return stopOnFaults(cloud.faults, paths);
+  const registering = await registeringOf(options);
   const outcome = evaluateScan(model, cloud.value, {
+    ...(registering && { registering }),
     ...(options.step !== undefined && { step_mm: options.step }),
     ...(options.accuracy !== undefined && { scanner_accuracy_mm: options.accuracy }),
   });
   if (!outcome.ok) return stopOnFaults(outcome.faults, paths);
   const result = outcome.value;
+  const written =
+    options.path === undefined ? [] : [await writePath(options.path, model, result, options.step)];
   return {
     exit: result.verdict === "hold" ? EXIT.hold : EXIT.done,
     json: result,
     text: evaluationText(result, model, look),
-    talk,
+    talk: [talk, ...written].filter(Boolean).join("\n"),
   };
 }

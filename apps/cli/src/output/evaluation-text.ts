@@ -83,8 +83,16 @@ function remainingLine({ remaining }: ScanResult): string | null {
   return `largest ${max_abs_mm.toFixed(3)} mm at ${at_mm.toFixed(1)}, rms ${rms_mm.toFixed(3)}; bend ${bend_lateral_mm.toFixed(3)} lateral, ${bend_normal_mm.toFixed(3)} normal; twist ${twist_deg.toFixed(2)} deg`;
 }
 
+function registrationLine({ registration }: ScanResult): string | null {
+  if (registration === undefined) return null;
+  const { by, rms_mm, condition, u_mm, free } = registration;
+  const open = free.length > 0 ? `; left open: ${free.join(", ").replaceAll("_", " ")}` : "";
+  return `by ${by === "datums" ? "datum points" : "its plates"}: ${rms_mm.toFixed(3)} mm left, condition ${condition.toFixed(3)}, u ${u_mm.toFixed(3)} mm at the seam${open}`;
+}
+
 function factLines(result: ScanResult): string[] {
   const facts: [string, string | null][] = [
+    ["placed", registrationLine(result)],
     ["coverage", coverageLine(result)],
     ["ends", endsLine(result)],
     ["rigid part", rigidLine(result)],

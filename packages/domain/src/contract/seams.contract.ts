@@ -1,4 +1,6 @@
 import { z } from "zod";
+import { CorrectedPath } from "../schemas/corrected-path.ts";
+import { FillAdvice } from "../schemas/fill-advice.ts";
 import { Inspection, InspectionCreate } from "../schemas/inspection.ts";
 import { PageQuery, pageOf } from "../schemas/paging.ts";
 import { PassCreate, PassRecord } from "../schemas/pass.ts";
@@ -110,6 +112,46 @@ export const getSection = contract({
   }),
   answer: { status: 200, description: "The section", schema: SectionView },
   problems: ["not-found", "parameter-unknown"],
+});
+
+export const getCorrectedPath = contract({
+  method: "get",
+  path: "/scans/{id}/path",
+  operationId: "getCorrectedPath",
+  summary: "The nominal line moved to the joint as scanned, with tool axis",
+  description:
+    "Advice for the welding coordinator, no command to a robot. Stations not measured are left out.",
+  group: "Scans",
+  access: "records:read",
+  params: IdParams,
+  answer: { status: 200, description: "The path", schema: CorrectedPath },
+  problems: ["not-found"],
+});
+
+export const getCorrectedPathCsv = contract({
+  method: "get",
+  path: "/scans/{id}/path.csv",
+  operationId: "getCorrectedPathCsv",
+  summary: "The same path as CSV",
+  group: "Scans",
+  access: "records:read",
+  params: IdParams,
+  answer: { status: 200, description: "One row a point", media_type: "text/csv" },
+  problems: ["not-found"],
+});
+
+export const getFillAdvice = contract({
+  method: "get",
+  path: "/scans/{id}/fill",
+  operationId: "getFillAdvice",
+  summary: "The fill that the measured gap asks for, and the travel speed that gives it",
+  description:
+    "Advice for the welding coordinator: area, travel speed at the same wire feed and resulting heat input at each station, held against the seam's procedure.",
+  group: "Scans",
+  access: "records:read",
+  params: IdParams,
+  answer: { status: 200, description: "The advice", schema: FillAdvice },
+  problems: ["not-found", "procedure-incomplete"],
 });
 
 export const pushPass = contract({

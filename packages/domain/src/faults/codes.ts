@@ -94,6 +94,12 @@ export const FAULT_KINDS = {
     "Give the poses file, or a cloud in the part frame.",
   ),
   "scan-pose-invalid": kind(422, 2, "A pose is not valid", "A pose needs a point and a unit quaternion."),
+  "procedure-incomplete": kind(
+    409,
+    30,
+    "The procedure does not say enough",
+    "Ask the welding coordinator to give the range named, in a new revision.",
+  ),
   "registration-undetermined": kind(
     422,
     2,

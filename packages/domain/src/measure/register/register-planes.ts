@@ -28,9 +28,10 @@ export type Pairing = (moved: (p: Vector) => Vector) => readonly PlanePair[];
 export interface PlaneRegistration {
   readonly rotation: Matrix;
   readonly translation_mm: Vector;
+  /** Robust root mean square of what is left (1.4826 times the median), mm. */
   readonly rms_mm: number;
   readonly rounds: number;
-  /** Smallest over largest eigenvalue of the pairs' observability, 0 to 1. */
+  /** Smallest over largest eigenvalue of the motions that the planes show, 0 to 1. */
   readonly condition: number;
   /** Motions that the planes do not show, each as turn (radians per mm of size) and slide; left at 0. */
   readonly free: readonly (readonly number[])[];
@@ -91,7 +92,8 @@ export function observability(pairs: readonly PlanePair[]): { value: number; mot
     .sort((a, b) => a.value - b.value);
 }
 
-const named = (motion: readonly number[]): string => {
+/** A motion, (turn about the centre, slide), in words. */
+export const motionWords = (motion: readonly number[]): string => {
   const [a = 0, b = 0, c = 0, x = 0, y = 0, z = 0] = motion;
   const words = (v: Vector) => v.map((part) => part.toFixed(2)).join(", ");
   return Math.hypot(x, y, z) >= Math.hypot(a, b, c)
@@ -123,7 +125,7 @@ export function registerPlanes(
   if (hidden.length > 0 && options.leave_out !== true)
     return refused(
       fault(
-        `The plates do not show ${hidden.map(({ motion }) => named(motion)).join(", nor ")}. Give datum points.`,
+        `The plates do not show ${hidden.map(({ motion }) => motionWords(motion)).join(", nor ")}. Give datum points.`,
       ),
     );
   let rounds = 0;
@@ -147,13 +149,13 @@ export function registerPlanes(
     pairs = pairing(moved);
     if (Math.hypot(...x) < SETTLED) break;
   }
-  const square = pairs.reduce((sum, pair) => sum + dot(minus(pair.on, pair.point), pair.normal) ** 2, 0);
+  const left = pairs.map((pair) => Math.abs(dot(minus(pair.on, pair.point), pair.normal)));
   return good({
     rotation,
     translation_mm: translation,
-    rms_mm: Math.sqrt(square / pairs.length),
+    rms_mm: 1.4826 * medianOf(left),
     rounds: rounds + 1,
-    condition: largest > 0 ? (seen[0]?.value ?? 0) / largest : 0,
+    condition: largest > 0 ? (seen[hidden.length]?.value ?? 0) / largest : 0,
     free: hidden.map(({ motion }) => motion),
   });
 }

@@ -1,11 +1,25 @@
 import { type Fault, good, type Outcome, refused } from "../../faults/fault.ts";
 import type { ScanResult } from "../../schemas/scan-result.ts";
 import type { SeamModel } from "../../schemas/seam-model.ts";
+import { jointSeries } from "../along/joint-series.ts";
 import { jointFaces } from "../joints/joint-faces.ts";
-import { type Matrix, plus, times, turned, type Vector, vectorOf } from "../result/rotation.ts";
+import { rigidPart } from "../result/rigid.ts";
+import {
+  type Matrix,
+  minus,
+  plus,
+  product,
+  rotationOf,
+  times,
+  turned,
+  type Vector,
+  vectorOf,
+} from "../result/rotation.ts";
+import { stationResults } from "../result/station-results.ts";
 import type { ScanCloud } from "../scan-cloud.ts";
-import { lineFrames, type SeamFrames } from "../seam/seam-frames.ts";
-import { type PlanePair, registerPlanes } from "./register-planes.ts";
+import { measureSeam } from "../seam/measure-seam.ts";
+import { lineFrames, type SeamFrames, stationFrames } from "../seam/seam-frames.ts";
+import { motionWords, type PlanePair, registerPlanes } from "./register-planes.ts";
 import { type DatumPoint, registerPoints } from "./register-points.ts";
 import { targetError } from "./registration-error.ts";
 
@@ -28,7 +42,7 @@ const DEG = 180 / Math.PI;
 const ASKED = 3000;
 
 /** A point within this of a nominal face is taken to be the face's, mm: registration by plates begins near. */
-const NEAR_MM = 4;
+const NEAR_MM = 3;
 
 /** Points this near to a corner may belong to either face, mm. */
 const CORNER_MM = 1.5;
@@ -132,8 +146,33 @@ function jointFacesOf(model: SeamModel) {
   return kept;
 }
 
-function byPlates(model: SeamModel, cloud: ScanCloud): Outcome<RegisteredScan> {
+/** A motion of points: p goes to R p + t. */
+interface Motion {
+  readonly rotation: Matrix;
+  readonly translation: Vector;
+}
+
+/** The motion that takes the joint, as it is found in a scan, back to the model: near enough to begin with. */
+function firstMotion(model: SeamModel, cloud: ScanCloud): Motion {
+  const seam = measureSeam(model, cloud);
+  const frames = stationFrames(model);
+  const along = jointSeries(seam);
+  const stations = stationResults({ seam, along, frames, scanner_accuracy_mm: 0, u_registration_mm: 0 });
+  const rigid = rigidPart(stations, frames);
+  if (!rigid) return { rotation: rotationOf([0, 0, 0]), translation: [0, 0, 0] };
+  const { rotation: out, centre_mm: c, translation_mm: t } = rigid.motion;
+  const rotation: Matrix = [
+    [out[0][0], out[1][0], out[2][0]],
+    [out[0][1], out[1][1], out[2][1]],
+    [out[0][2], out[1][2], out[2][2]],
+  ];
+  return { rotation, translation: minus(c, turned(rotation, plus(c, t))) };
+}
+
+function byPlates(model: SeamModel, scan: ScanCloud): Outcome<RegisteredScan> {
   const frames = lineFrames(model);
+  const first = firstMotion(model, scan);
+  const cloud = movedCloud(scan, first.rotation, first.translation);
   const every = Math.max(1, Math.floor(cloud.count / ASKED));
   const asked = Array.from({ length: Math.floor(cloud.count / every) }, (_, k) =>
     at(cloud.xyz_mm, k * every),
@@ -142,9 +181,19 @@ function byPlates(model: SeamModel, cloud: ScanCloud): Outcome<RegisteredScan> {
     leave_out: true,
   });
   if (!found.ok) return found;
-  const { rotation, translation_mm, rms_mm, condition, free } = found.value;
+  const { rms_mm, condition, free } = found.value;
+  // A slide along a straight seam, or round a circle, moves the joint onto itself; more than that must not stay open.
+  if (free.length > 1) {
+    const fault: Fault = {
+      code: "registration-undetermined",
+      detail: `The plates near the model do not show ${free.map(motionWords).join(", nor ")}. Bring the scan nearer, or give datum points.`,
+    };
+    return refused(fault);
+  }
+  const rotation = product(found.value.rotation, first.rotation);
+  const translation_mm = plus(turned(found.value.rotation, first.translation), found.value.translation_mm);
   return good({
-    cloud: movedCloud(cloud, rotation, translation_mm),
+    cloud: movedCloud(scan, rotation, translation_mm),
     report: {
       by: "plates",
       translation_mm: rounded(translation_mm),
