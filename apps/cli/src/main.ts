@@ -81,6 +81,29 @@ The path is advice for the welding coordinator, no command to a robot.`,
   );
 
 program
+  .command("plan")
+  .description("what a scan of a seam will give with a scanner and a speed, and whether it serves")
+  .requiredOption("--model <file>", "the model seam, JSON")
+  .requiredOption("--scanner <file>", "the scanner's data, JSON")
+  .requiredOption("--stand-off <mm>", "stand-off the scanner is driven at", positive)
+  .requiredOption("--travel <mm/s>", "travel speed while scanning", positive)
+  .option("--run-off <mm>", "way beyond each end", positive)
+  .addOption(json())
+  .addHelpText(
+    "after",
+    `
+Exit: 0 the plan serves, 10 it does not, 2 unreadable input
+
+  beadroll plan --model nominal.json --scanner scanner.json --stand-off 170 --travel 100
+
+scanner.json: {"profile_rate_hz": 200, "points_per_profile": 1280, "near_mm": 120, "far_mm": 220,
+  "width_near_mm": 60, "width_far_mm": 100}`,
+  )
+  .action((options) =>
+    runVerb(async () => (await import("./commands/plan.ts")).plan(options, look), options.json === true),
+  );
+
+program
   .command("enrol")
   .description("keep this computer's server and key, once the server knows the key")
   .requiredOption("--server <url>", "address of the server")
