@@ -47,6 +47,7 @@ async function findAddresses(): Promise<Record<string, string>> {
     "new procedure": "/procedures/new",
     drawings: "/drawings",
     drawing: `/drawings/${drawing?.id}`,
+    "model seam": `/drawings/${drawing?.id}/seams/S1`,
     "new drawing": "/drawings/new",
     users: "/users",
     records: "/records",

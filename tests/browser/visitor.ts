@@ -50,17 +50,28 @@ export async function passSignIn(page: Page, role: Role): Promise<void> {
   await page.waitForURL((url) => url.pathname !== "/sign-in");
 }
 
-/** Asks the API as a person does; for finding what a test needs, not for testing. */
-export async function askApi<T>(url: string, role: Role, path: string): Promise<T> {
+async function bearer(url: string, role: Role): Promise<{ Authorization: string }> {
   const session = await fetch(`${url}/api/v1/session`, {
     method: "POST",
     headers: { "Content-Type": "application/json" },
     body: JSON.stringify(ACCOUNTS[role]),
   });
   const { access_token }: { access_token: string } = await session.json();
-  const answer = await fetch(`${url}/api/v1${path}`, {
-    headers: { Authorization: `Bearer ${access_token}` },
-  });
+  return { Authorization: `Bearer ${access_token}` };
+}
+
+async function ask(url: string, role: Role, path: string): Promise<Response> {
+  const answer = await fetch(`${url}/api/v1${path}`, { headers: await bearer(url, role) });
   if (!answer.ok) throw new Error(`${path}: ${answer.status} ${await answer.text()}`);
-  return answer.json();
+  return answer;
+}
+
+/** Asks the API as a person does; for finding what a test needs, not for testing. */
+export async function askApi<T>(url: string, role: Role, path: string): Promise<T> {
+  return (await ask(url, role, path)).json();
+}
+
+/** A stored file's bytes. */
+export async function askFile(url: string, role: Role, digest: string): Promise<Buffer> {
+  return Buffer.from(await (await ask(url, role, `/files/${digest}`)).arrayBuffer());
 }

@@ -28,6 +28,7 @@ export const PATHS = {
   drawings: { path: "/drawings", file: "drawings", nav: "Drawings" },
   drawingNew: { path: "/drawings/new", file: "drawing-new" },
   drawing: { path: "/drawings/:id", file: "drawing" },
+  modelSeam: { path: "/drawings/:id/seams/:number", file: "model-seam" },
   people: { path: "/people", file: "people", nav: "People" },
   personNew: { path: "/people/new", file: "person-new" },
   person: { path: "/people/:tag", file: "person" },

@@ -28,7 +28,11 @@ export default function DrawingPage(): ReactElement {
   const parts = drawing.part_count === 1 ? "1 part" : `${drawing.part_count} parts`;
   const table = (
     <Sheet title="Model seams" aside="in welding sequence" flush>
-      <ModelSeamsTable seams={drawing.model_seams} onEdit={mayWrite ? setEdited : null} />
+      <ModelSeamsTable
+        drawingId={drawing.id}
+        seams={drawing.model_seams}
+        onEdit={mayWrite ? setEdited : null}
+      />
     </Sheet>
   );
   return (

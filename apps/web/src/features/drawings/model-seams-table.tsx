@@ -1,5 +1,6 @@
 import type { ModelSeam } from "@beadroll/domain/schemas/drawing";
 import type { ReactElement } from "react";
+import { pathTo } from "../../app/paths.ts";
 import { Button } from "../../kit/actions/button.tsx";
 import type { Column } from "../../kit/tables/columns.ts";
 import { DataTable } from "../../kit/tables/data-table.tsx";
@@ -52,6 +53,7 @@ const COLUMNS: readonly Column<ModelSeam>[] = [
 
 /** The model seams of a drawing in welding sequence. */
 export function ModelSeamsTable(props: {
+  drawingId: string;
   seams: readonly ModelSeam[];
   onEdit: ((seam: ModelSeam) => void) | null;
 }): ReactElement {
@@ -76,6 +78,7 @@ export function ModelSeamsTable(props: {
       rows={props.seams}
       columns={onEdit === null ? COLUMNS : [...COLUMNS, edit]}
       rowKey={(seam) => seam.id}
+      rowHref={(seam) => pathTo("modelSeam", { id: props.drawingId, number: seam.number })}
       fileName="model-seams"
       dense
       empty={

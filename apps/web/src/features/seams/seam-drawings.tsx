@@ -1,5 +1,5 @@
 import type { PassRecord } from "@beadroll/domain/schemas/pass";
-import type { ScanPage } from "@beadroll/domain/schemas/scan";
+import type { ScanResult } from "@beadroll/domain/schemas/scan-result";
 import type { SeamModel } from "@beadroll/domain/schemas/seam-model";
 import { type ReactElement, useMemo } from "react";
 import { PlotStack } from "../../kit/plots/plot-stack.tsx";
@@ -10,8 +10,8 @@ import { passPlots } from "./pass-plots.ts";
 import { scanPlots, scanRipples } from "./scan-plots.ts";
 
 /** Where the arc struck again, and where a tack hides the root. */
-function marksOf(scan: ScanPage, pass: PassRecord | null): StationMark[] {
-  const tacks = scan.result.stations.filter(
+function marksOf(result: ScanResult, pass: PassRecord | null): StationMark[] {
+  const tacks = result.stations.filter(
     (station, index, all) => station.tack === true && all[index - 1]?.tack !== true,
   );
   const restarts = pass?.result.restarts.filter((restart) => restart.station_mm !== null) ?? [];
@@ -28,17 +28,17 @@ function marksOf(scan: ScanPage, pass: PassRecord | null): StationMark[] {
 /** A seam's scan as a bead, its deviations and its pass on one axis, joined by one cursor. */
 export function SeamDrawings(props: {
   label: string;
-  scan: ScanPage;
+  result: ScanResult;
   model: SeamModel;
   pass: PassRecord | null;
 }): ReactElement {
-  const { scan, model, pass } = props;
-  const ripples = useMemo(() => scanRipples(scan.result, model), [scan.result, model]);
+  const { result, model, pass } = props;
+  const ripples = useMemo(() => scanRipples(result, model), [result, model]);
   const plots = useMemo(
-    () => [...scanPlots(scan.result, model), ...(pass === null ? [] : passPlots(pass))],
-    [scan.result, model, pass],
+    () => [...scanPlots(result, model), ...(pass === null ? [] : passPlots(pass))],
+    [result, model, pass],
   );
-  const marks = useMemo(() => marksOf(scan, pass), [scan, pass]);
+  const marks = useMemo(() => marksOf(result, pass), [result, pass]);
   const { length_mm } = model.seam;
   return (
     <div className="grid grid-cols-[minmax(0,1fr)] gap-3">

@@ -1,10 +1,11 @@
-import type { ScanPage } from "@beadroll/domain/schemas/scan";
 import type { SeamPage } from "@beadroll/domain/schemas/seam";
 import { useSuspenseQuery } from "@tanstack/react-query";
 import type { ReactElement } from "react";
 import { Sheet } from "../../kit/page/sheet.tsx";
 import { EmptyState } from "../../kit/states/empty-state.tsx";
 import { StateMark } from "../../kit/states/state-mark.tsx";
+import { ScanAdvice } from "./scan-advice.tsx";
+import { Reasons } from "./scan-reasons.tsx";
 import { SeamDrawings } from "./seam-drawings.tsx";
 import { seamNumber, verdictSentence } from "./seam-words.ts";
 import { seamQueries } from "./seams.queries.ts";
@@ -32,24 +33,6 @@ function NoScan(props: { tag: string }): ReactElement {
   );
 }
 
-function Reasons(props: { scan: ScanPage }): ReactElement | null {
-  const [, ...more] = props.scan.result.reasons;
-  const notes = props.scan.result.warnings;
-  if (more.length === 0 && notes.length === 0) return null;
-  return (
-    <ul className="mb-3 grid gap-0.5">
-      {more.map((reason) => (
-        <li key={`${reason.check} ${reason.level} ${reason.station_mm}`}>{reason.text}</li>
-      ))}
-      {notes.map((note) => (
-        <li key={note} className="text-ash">
-          {note}
-        </li>
-      ))}
-    </ul>
-  );
-}
-
 function ShownScan(props: { seam: SeamPage; scanId: string }): ReactElement {
   const { seam } = props;
   const { data: scan } = useSuspenseQuery(seamQueries.scan(props.scanId));
@@ -58,9 +41,10 @@ function ShownScan(props: { seam: SeamPage; scanId: string }): ReactElement {
   const label = `Seam ${seamNumber(seam.number, scan.attempt)}`;
   return (
     <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-6 xl:grid-cols-[minmax(0,1fr)_26rem]">
-      <Sheet title={<StateMark state={scan.verdict} word={verdictSentence(scan)} />}>
-        <Reasons scan={scan} />
-        <SeamDrawings label={label} scan={scan} model={model} pass={pass} />
+      <Sheet title={<StateMark state={scan.verdict} word={verdictSentence(scan.result)} />}>
+        <Reasons result={scan.result} />
+        <SeamDrawings label={label} result={scan.result} model={model} pass={pass} />
+        {scan.stage === "fitup" ? <ScanAdvice scanId={scan.id} /> : null}
       </Sheet>
       <div className="xl:sticky xl:top-20">
         <Sheet title="Section at the cursor">

@@ -1,11 +1,11 @@
 import type { PassRecord } from "@beadroll/domain/schemas/pass";
-import type { ScanPage } from "@beadroll/domain/schemas/scan";
+import type { ScanResult } from "@beadroll/domain/schemas/scan-result";
 import type { SeamPage } from "@beadroll/domain/schemas/seam";
 import { describe, expect, it } from "vitest";
 import { jointWords, lotsOfPass, qualificationWords, seamNumber, verdictSentence } from "./seam-words.ts";
 
-const scan = (verdict: ScanPage["verdict"], text?: string) =>
-  ({ verdict, result: { reasons: text === undefined ? [] : [{ text }] } }) as unknown as ScanPage;
+const scan = (verdict: ScanResult["verdict"], text?: string) =>
+  ({ verdict, reasons: text === undefined ? [] : [{ text }] }) as unknown as ScanResult;
 const pass = (fields: Partial<PassRecord>) => fields as PassRecord;
 
 describe("what a seam's page says", () => {

@@ -1,5 +1,5 @@
 import type { PassRecord } from "@beadroll/domain/schemas/pass";
-import type { ScanPage } from "@beadroll/domain/schemas/scan";
+import type { ScanResult } from "@beadroll/domain/schemas/scan-result";
 import type { SeamPage, SeamState } from "@beadroll/domain/schemas/seam";
 import type { JointType } from "@beadroll/domain/schemas/seam-model";
 
@@ -23,17 +23,17 @@ export const seamNumber = (number: string, attempt: number): string =>
   attempt > 1 ? `${number}R${attempt - 1}` : number;
 
 /** What a verdict means for whoever reads it. */
-const VERDICT_WORDS: Readonly<Record<ScanPage["verdict"], string>> = {
+const VERDICT_WORDS: Readonly<Record<ScanResult["verdict"], string>> = {
   within: "Within: the nominal path serves.",
   adapt: "Adapt: the path has to follow the joint; everything is inside what may be followed.",
   hold: "Hold: somebody has to decide before this seam is welded.",
 };
 
 /** A scan's verdict in one sentence: its first reason, or what the verdict means. */
-export function verdictSentence(scan: ScanPage): string {
-  const [first] = scan.result.reasons;
-  if (first === undefined || scan.verdict === "within") return VERDICT_WORDS[scan.verdict];
-  return `${scan.verdict === "hold" ? "Hold" : "Adapt"}: ${first.text}`;
+export function verdictSentence({ verdict, reasons }: ScanResult): string {
+  const [first] = reasons;
+  if (first === undefined || verdict === "within") return VERDICT_WORDS[verdict];
+  return `${verdict === "hold" ? "Hold" : "Adapt"}: ${first.text}`;
 }
 
 /** What is to be done now, by a seam's state. */
