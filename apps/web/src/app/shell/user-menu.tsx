@@ -15,7 +15,7 @@ export function UserMenu(props: { person: ShellPerson | null }): ReactElement {
       <button
         type="button"
         popoverTarget={id}
-        className="-mr-2 flex h-9 items-center gap-2 lg:-ml-3 rounded-sm px-2 text-sm font-semibold whitespace-nowrap text-on-soot hover:bg-field-on-soot max-lg:mb-3 max-lg:h-11"
+        className={`-mr-2 flex h-9 items-center gap-2 lg:-ml-3 rounded-sm px-2 text-sm font-semibold whitespace-nowrap text-on-soot hover:bg-field-on-soot max-lg:h-11 ${props.person === null ? "" : "max-lg:mb-3"}`}
       >
         {props.person?.name ?? "Screen"}
         <span

@@ -1,25 +1,21 @@
-import { ApiProblem } from "@beadroll/client/api-problem";
 import { type FormEvent, type ReactElement, useEffect, useRef, useState } from "react";
 import { Button } from "../../kit/actions/button.tsx";
 import { PasswordField } from "../../kit/fields/password-field.tsx";
 import { TextField } from "../../kit/fields/text-field.tsx";
 import { FaultPanel } from "../../kit/states/fault-panel.tsx";
 import { type ProblemWords, problemFrom } from "../../kit/states/problem-words.ts";
+import { RefusalNote } from "./refusal-note.tsx";
+import { refusalOf, type SignInRefusal } from "./refusal-words.ts";
 
 interface SignInFormProps {
   onSignIn: (fields: { login: string; password: string }) => Promise<void>;
 }
 
-/** What a refusal means to somebody at the door; null where only the server's own words serve. */
-function refusalWords(error: unknown): string | null {
-  if (!(error instanceof ApiProblem)) return null;
-  if (error.code === "sign-in-failed") return "Name or password is not right. Check both and try again.";
-  if (error.code !== "rate-limited") return null;
-  const wait = error.retry_after_s;
-  const minutes = wait === null ? null : Math.ceil(wait / 60);
-  return minutes === null
-    ? "Too many tries. Wait a while, then try again."
-    : `Too many tries. This account can sign in again in ${minutes === 1 ? "a minute" : `${minutes} minutes`}.`;
+/** What came of the last try. The number makes each refusal a new one, so that it is read out again. */
+interface Outcome {
+  readonly tries: number;
+  readonly refusal: SignInRefusal | null;
+  readonly problem: ProblemWords | null;
 }
 
 /** Name and password. A password is never kept as a draft. */
@@ -28,43 +24,42 @@ export function SignInForm(props: SignInFormProps): ReactElement {
   const [login, setLogin] = useState("");
   const [password, setPassword] = useState("");
   const [isBusy, setBusy] = useState(false);
-  const [refused, setRefused] = useState<string | null>(null);
-  const [problem, setProblem] = useState<ProblemWords | null>(null);
+  const [outcome, setOutcome] = useState<Outcome>({ tries: 0, refusal: null, problem: null });
   // The first field takes the focus, so that a keyboard or badge reader can begin at once.
   useEffect(() => form.current?.querySelector("input")?.focus(), []);
   const submit = async (event: FormEvent) => {
     event.preventDefault();
     setBusy(true);
-    setRefused(null);
-    setProblem(null);
+    const tries = outcome.tries + 1;
+    setOutcome({ tries, refusal: null, problem: null });
     try {
       await props.onSignIn({ login: login.trim(), password });
     } catch (error) {
-      const words = refusalWords(error);
-      setRefused(words);
-      if (words === null) setProblem(problemFrom(error));
+      const refusal = refusalOf(error);
+      setOutcome({ tries, refusal, problem: refusal === null ? problemFrom(error) : null });
       setBusy(false);
-      form.current?.querySelector<HTMLInputElement>("input[name=password]")?.select();
+      const typed = form.current?.querySelector<HTMLInputElement>("input[name=password]");
+      typed?.focus();
+      typed?.select();
     }
   };
   return (
     <form ref={form} className="grid gap-5" onSubmit={(event) => void submit(event)}>
-      <TextField label="Name" name="login" value={login} onChange={setLogin} autoComplete="username" />
-      <PasswordField
-        label="Password"
-        name="password"
-        value={password}
-        onChange={setPassword}
-        error={refused ?? undefined}
-      />
-      {problem === null ? null : <FaultPanel problem={problem} />}
-      <Button
-        type="submit"
-        kind="primary"
-        large
-        busy={isBusy}
-        disabled={login.trim() === "" || password === ""}
-      >
+      {/* A field keeps room for its error at the right; here errors stand under both, and the room is taken back. */}
+      <div className="grid gap-5 sm:-mr-4">
+        <TextField
+          label="Name"
+          name="login"
+          value={login}
+          onChange={setLogin}
+          autoComplete="username"
+          large
+        />
+        <PasswordField label="Password" name="password" value={password} onChange={setPassword} large />
+      </div>
+      {outcome.refusal === null ? null : <RefusalNote key={outcome.tries} refusal={outcome.refusal} />}
+      {outcome.problem === null ? null : <FaultPanel problem={outcome.problem} />}
+      <Button type="submit" kind="primary" large busy={isBusy}>
         Sign in
       </Button>
     </form>
