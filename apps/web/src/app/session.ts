@@ -5,8 +5,8 @@ import {
 } from "@beadroll/domain/contract/session.contract";
 import type { Account } from "@beadroll/domain/schemas/session";
 import { useSyncExternalStore } from "react";
-import { redirect } from "react-router";
 import { openClient, renewSession } from "./client.ts";
+import { leadOn } from "./lead-on.ts";
 import { PATHS } from "./paths.ts";
 import { queryClient } from "./providers.tsx";
 import { onSessionChange, sessionEnded, sessionOpened, sessionState } from "./session-store.ts";
@@ -31,7 +31,7 @@ export async function requireSession(request: Request): Promise<void> {
   if (sessionState().status === "unknown") await renewSession();
   if (sessionState().status === "in") return;
   const { pathname, search } = new URL(request.url);
-  throw redirect(signInPath(`${pathname}${search}`));
+  throw leadOn(request, signInPath(`${pathname}${search}`));
 }
 
 /** Signs in. @throws ApiProblem when name or password is wrong or the account waits */

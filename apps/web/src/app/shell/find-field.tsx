@@ -1,7 +1,7 @@
 import { type FormEvent, type ReactElement, useEffect, useRef } from "react";
-import { useNavigate } from "react-router";
+import { useLocation, useNavigate } from "react-router";
 import { shortcutChoice } from "../choices/shortcuts.ts";
-import { findPath } from "../paths.ts";
+import { findPath, PATHS } from "../paths.ts";
 
 const EDITABLE = "input, textarea, select, [contenteditable]";
 
@@ -10,6 +10,7 @@ export function FindField(): ReactElement {
   const input = useRef<HTMLInputElement>(null);
   const navigate = useNavigate();
   useSlashFocus(input);
+  useSearchedText(input);
   const find = (event: FormEvent) => {
     event.preventDefault();
     const text = input.current?.value.trim() ?? "";
@@ -50,4 +51,15 @@ function useSlashFocus(input: React.RefObject<HTMLInputElement | null>): void {
     document.addEventListener("keydown", onKey);
     return () => document.removeEventListener("keydown", onKey);
   }, [input]);
+}
+
+/** On the page of a search the field holds what was searched for, to be changed; every other page empties it. */
+function useSearchedText(input: React.RefObject<HTMLInputElement | null>): void {
+  const { pathname, search } = useLocation();
+  // The field keeps its own text while somebody types; only a change of address sets it.
+  useEffect(() => {
+    if (input.current === null) return;
+    const searched = pathname === PATHS.find.path ? new URLSearchParams(search).get("q") : null;
+    input.current.value = searched ?? "";
+  }, [input, pathname, search]);
 }

@@ -32,6 +32,22 @@ export function foundGroups(items: readonly Found[]): FoundGroup[] {
   });
 }
 
+/** The server names no more of a kind than this. */
+const PER_KIND = 12;
+
+/** Whether there may be more of the kind than the answer names. */
+export const isCut = (group: FoundGroup): boolean => group.items.length >= PER_KIND;
+
+/** The floor with one cell alone, as a cell's own screen shows it. */
+const cellPath = (tag: string): string =>
+  `${PATHS.floor.path}?${new URLSearchParams({ cell: tag }).toString()}`;
+
+/** The one thing that a whole tag found, or null. Anything else is for people to choose from. */
+export function soleTagged(items: readonly Found[], tag: string): Found | null {
+  const [only, ...others] = items;
+  return only?.tag === tag && others.length === 0 ? only : null;
+}
+
 /** Where a found thing's page is. */
 export function foundPath({ kind, tag, id }: Found): string {
   switch (kind) {
@@ -44,6 +60,6 @@ export function foundPath({ kind, tag, id }: Found): string {
     case "procedure":
       return pathTo(kind, { id });
     case "cell":
-      return PATHS.floor.path;
+      return tag === null ? PATHS.floor.path : cellPath(tag);
   }
 }
