@@ -1,91 +1,33 @@
 import { describe, expect, it } from "vitest";
-import { type JointType, parseSeamModel, type SeamModel } from "../../schemas/seam-model.ts";
-import type { Line } from "../fit/line-fit.ts";
+import { JOINT_TYPES, type JointType } from "../../schemas/seam-model.ts";
+import { jointModel, type Moves, movedLine, SECTIONS } from "../testing/joints.ts";
 import { constructRoot } from "./construct-root.ts";
 import { type JointFaces, jointFaces } from "./joint-faces.ts";
 
 const RAD = Math.PI / 180;
 
-function modelOf(joint_type: JointType, section: object): SeamModel {
-  const frame = { tangent: [1, 0, 0], lateral: [0, 1, 0], normal: [0, 0, 1] };
-  const parsed = parseSeamModel({
-    joint_type,
-    seam: {
-      length_mm: 10,
-      vertices: [
-        { station_mm: 0, point: [0, 0, 0], ...frame },
-        { station_mm: 10, point: [10, 0, 0], ...frame },
-      ],
-    },
-    section,
-  });
-  if (!parsed.ok) throw new Error(JSON.stringify(parsed.faults));
-  return parsed.value;
-}
-
-const plates = (a: number, b: number) => ({ plate_a: { thickness_mm: a }, plate_b: { thickness_mm: b } });
-
-const MODELS: Record<JointType, SeamModel> = {
-  fillet_t: modelOf("fillet_t", {
-    plate_a: { thickness_mm: 12 },
-    plate_b: { thickness_mm: 6, height_mm: 20 },
-  }),
-  corner_closed: modelOf("corner_closed", {
-    plate_a: { thickness_mm: 8 },
-    plate_b: { thickness_mm: 8, height_mm: 15 },
-  }),
-  lap: modelOf("lap", plates(5, 6)),
-  corner_open: modelOf("corner_open", plates(8, 10)),
-  butt_v: modelOf("butt_v", { ...plates(10, 10), gap_mm: 2, groove_angle_deg: 60, root_face_mm: 2 }),
-  butt_half_v: modelOf("butt_half_v", {
-    ...plates(10, 10),
-    gap_mm: 2,
-    groove_angle_deg: 45,
-    root_face_mm: 2,
-  }),
-  butt_square: modelOf("butt_square", { ...plates(4, 4), gap_mm: 2 }),
-};
-
-/** Each plate moved as a whole: shift in (lateral, normal), then turn about the nominal root. */
-interface Moves {
-  readonly a?: readonly [l: number, n: number, turn_deg: number];
-  readonly b?: readonly [l: number, n: number, turn_deg: number];
-}
-
 /** The faces of moved plates, exactly, as lines in their own nominal axes. */
 function exactLines(joint: JointFaces, moves: Moves) {
-  const edges: [number, number] = [Number.NaN, Number.NaN];
-  const lines = joint.faces.map((face, index): Line => {
-    const [dl, dn, turn] = moves[face.plate] ?? [0, 0, 0];
-    const [c, s] = [Math.cos(turn * RAD), Math.sin(turn * RAD)];
-    const [l, n] = face.near;
-    const moved = [l * c - n * s + dl - l, l * s + n * c + dn - n] as const;
-    const [fc, fs] = [Math.cos(face.direction_rad), Math.sin(face.direction_rad)];
-    const line = {
-      t_mm: moved[0] * fc + moved[1] * fs,
-      d_mm: moved[1] * fc - moved[0] * fs,
-      angle_rad: turn * RAD,
-    };
-    if (index < 2) edges[index as 0 | 1] = line.t_mm;
-    return line;
-  });
-  return { lines, edges_mm: edges };
+  const lines = joint.faces.map((face) => movedLine(face, moves));
+  return { lines, edges_mm: [lines[0]?.t_mm ?? Number.NaN, lines[1]?.t_mm ?? Number.NaN] as const };
 }
 
+const modelOf = (type: JointType) => jointModel(type, SECTIONS[type]);
+
 const at = (type: JointType, moves: Moves) => {
-  const joint = jointFaces(MODELS[type]);
+  const joint = jointFaces(modelOf(type));
   const found = constructRoot(joint, exactLines(joint, moves));
   if (!found) throw new Error("no root");
   return found;
 };
 
-describe.each(Object.keys(MODELS) as JointType[])("%s", (type) => {
+describe.each(JOINT_TYPES)("%s", (type) => {
   it("stands at the model's root with the model's sizes when nothing is moved", () => {
     const found = at(type, {});
     expect(found.lateral_mm).toBeCloseTo(0, 12);
     expect(found.normal_mm).toBeCloseTo(0, 12);
     expect(found.angle_rad).toBeCloseTo(0, 12);
-    const nominal = MODELS[type].section.gap_mm ?? 0;
+    const nominal = modelOf(type).section.gap_mm ?? 0;
     if (Number.isFinite(found.gap_mm)) expect(found.gap_mm).toBeCloseTo(nominal, 10);
     if (type.startsWith("butt")) expect(found.mismatch_mm).toBeCloseTo(0, 12);
     else expect(found.mismatch_mm).toBeNaN();
@@ -148,7 +90,7 @@ describe("the mismatch", () => {
 });
 
 it("is no root when faces that should meet are parallel, or one is missing", () => {
-  const joint = jointFaces(MODELS.fillet_t);
+  const joint = jointFaces(modelOf("fillet_t"));
   const exact = exactLines(joint, {});
   const parallel = exact.lines.map((line, i) => (i === 1 ? { ...line, angle_rad: Math.PI / 2 } : line));
   expect(constructRoot(joint, { ...exact, lines: parallel })).toBeNull();
