@@ -32,7 +32,7 @@ export function Shell(props: {
         Skip to the page
       </a>
       <header className="screen-only on-soot top-0 z-30 max-lg:relative lg:sticky">
-        <div className="mx-auto flex min-h-14 max-w-[100rem] flex-wrap items-center gap-x-7 px-4 max-lg:gap-x-3 sm:px-6">
+        <div className="mx-auto flex min-h-14 max-w-[100rem] flex-wrap items-center gap-x-7 px-4 max-xl:gap-x-5 max-lg:gap-x-3 sm:px-6">
           <Wordmark />
           {props.isDoor === true ? (
             <div className="ml-auto" />

@@ -17,7 +17,7 @@ export function FindField(): ReactElement {
     if (text !== "") void navigate(findPath(text));
   };
   return (
-    <search className="lg:ml-auto max-lg:mb-3 max-lg:flex-1">
+    <search className="flex-1 max-lg:mb-3 lg:ml-auto lg:max-w-80 lg:min-w-36">
       <form action="/find" onSubmit={find}>
         <input
           ref={input}
@@ -29,7 +29,7 @@ export function FindField(): ReactElement {
           autoComplete="off"
           autoCapitalize="off"
           spellCheck={false}
-          className="figures h-9 w-72 rounded-sm border border-transparent bg-field-on-soot px-3 text-on-soot placeholder:text-ash-on-soot max-lg:h-11 max-lg:w-full xl:w-80"
+          className="figures h-9 w-full rounded-sm border border-transparent bg-field-on-soot px-3 text-on-soot placeholder:text-ash-on-soot max-lg:h-11"
         />
       </form>
     </search>

@@ -18,7 +18,7 @@ export function MainNav(): ReactElement | null {
   if (entries.length === 0) return null;
   return (
     <nav aria-label="Main" className="self-stretch max-lg:hidden">
-      <ul className="flex h-full gap-7">
+      <ul className="flex h-full gap-7 max-xl:gap-4">
         {entries.map((entry) => (
           <li key={entry.path} className="flex items-center">
             <NavLink

@@ -3,8 +3,9 @@ import { queryOptions } from "@tanstack/react-query";
 import { api } from "../../app/client.ts";
 
 /** The floor changes with every scan and pass: asked again while it is looked at. */
-const LIVE_MS = 5000;
+export const LIVE_MS = 5000;
 
+/** Every cell now, and the seams that wait. */
 export const floorQuery = () =>
   queryOptions({
     queryKey: ["floor"],
