@@ -60,7 +60,7 @@ export default function FloorPage(): ReactElement {
         </div>
       ) : null}
       {isFresh ? (
-        <FreshShop onRecordCell={mayRecord && !isRecording ? () => setRecording(true) : null} />
+        !isRecording && <FreshShop onRecordCell={mayRecord ? () => setRecording(true) : null} />
       ) : (
         <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-6 lg:grid-cols-[minmax(0,1fr)_20rem]">
           <div

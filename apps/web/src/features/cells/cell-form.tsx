@@ -1,5 +1,5 @@
 import { CellCreate } from "@beadroll/domain/schemas/cell";
-import type { ReactElement } from "react";
+import { type ReactElement, useEffect, useRef } from "react";
 import { Button } from "../../kit/actions/button.tsx";
 import { NumberField } from "../../kit/fields/number-field.tsx";
 import { TextField } from "../../kit/fields/text-field.tsx";
@@ -11,6 +11,9 @@ import { useCreateCell } from "./cells.mutations.ts";
 /** Records a cell: robot, power source and scanner, by name. */
 export function CellForm(props: { onDone: () => void }): ReactElement {
   const create = useCreateCell();
+  const holder = useRef<HTMLDivElement>(null);
+  // The button that opened the form is gone; whoever pressed it goes on in the first field.
+  useEffect(() => holder.current?.querySelector("input")?.focus(), []);
   const form = useForm({
     schema: CellCreate,
     draft: "cell-new",
@@ -21,16 +24,18 @@ export function CellForm(props: { onDone: () => void }): ReactElement {
     },
   });
   return (
-    <Form form={form} action="Record the cell" aside={<Button onClick={props.onDone}>Cancel</Button>}>
-      <TextField {...form.text("name")} label="Name on the floor" />
-      <TextField {...form.text("robot")} label="Robot" />
-      <TextField {...form.text("power_source")} label="Power source" />
-      <TextField {...form.text("scanner")} label="Scanner" />
-      <NumberField
-        {...form.number("scanner_accuracy_mm")}
-        label="Scanner's stated accuracy"
-        limit="The bound from its data sheet; it goes into the uncertainty of every number."
-      />
-    </Form>
+    <div ref={holder}>
+      <Form form={form} action="Record the cell" aside={<Button onClick={props.onDone}>Cancel</Button>}>
+        <TextField {...form.text("name")} label="Name on the floor" />
+        <TextField {...form.text("robot")} label="Robot" />
+        <TextField {...form.text("power_source")} label="Power source" />
+        <TextField {...form.text("scanner")} label="Scanner" />
+        <NumberField
+          {...form.number("scanner_accuracy_mm")}
+          label="Scanner's stated accuracy"
+          limit="The bound from its data sheet; it goes into the uncertainty of every number."
+        />
+      </Form>
+    </div>
   );
 }

@@ -107,7 +107,10 @@ function Mounted(props: { floor: FloorCell; changed: ReadonlySet<string> }): Rea
         {missing === null ? null : <StateMark tone="attend" word={missing} />}
       </div>
       {missing === null ? null : (
-        <p className="mb-2 text-ash">What is welded now is linked to no lot for what is missing.</p>
+        <p className="mb-2 text-ash">
+          Seams welded now are linked to no lot for it. The cell's computer mounts one:{" "}
+          <code className="figures">beadroll mount --slot wire --lot TAG</code>
+        </p>
       )}
       <KeyValue
         rows={[

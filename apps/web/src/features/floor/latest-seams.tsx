@@ -20,7 +20,12 @@ interface LatestSeamsProps {
 export function LatestSeams(props: LatestSeamsProps): ReactElement {
   const [last, ...before] = props.latest;
   if (last === undefined)
-    return <p className="text-ash">No scan or pass came from this cell yet: here stands what it does.</p>;
+    return (
+      <p className="text-ash">
+        Here stands what the cell did last. Its computer needs a key for that: an administrator makes it, and{" "}
+        <code className="figures">beadroll enrol</code> takes it.
+      </p>
+    );
   return (
     <>
       <LastSeam seam={last} isChanged={props.changed.has(last.id)} now_ms={props.now_ms} />
