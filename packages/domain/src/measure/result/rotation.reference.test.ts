@@ -23,6 +23,31 @@ const golden: Golden = JSON.parse(
   readFileSync(new URL("../../../vectors/geometry/registration.json", import.meta.url), "utf8"),
 );
 
+interface Turn {
+  readonly fixed_xyz_roll_pitch_yaw_deg: readonly [number, number, number];
+  readonly matrix: Matrix;
+  readonly rotation_vector_deg: Vector;
+}
+/** Turns by roll, pitch and yaw with their matrices and rotation vectors: scipy. */
+const rotations: { readonly cases: readonly Turn[] } = JSON.parse(
+  readFileSync(new URL("../../../vectors/geometry/rotations.json", import.meta.url), "utf8"),
+);
+
+describe("turns about fixed axes", () => {
+  it.each(rotations.cases)("roll, pitch, yaw $fixed_xyz_roll_pitch_yaw_deg", (turn) => {
+    const [roll, pitch, yaw] = turn.fixed_xyz_roll_pitch_yaw_deg;
+    const [x, y, z] = turn.rotation_vector_deg;
+    near(rotationOf([x / DEG, y / DEG, z / DEG]), turn.matrix, 12);
+    const aboutX = rotationOf([roll / DEG, 0, 0]);
+    const aboutY = rotationOf([0, pitch / DEG, 0]);
+    const aboutZ = rotationOf([0, 0, yaw / DEG]);
+    near(product(aboutZ, product(aboutY, aboutX)), turn.matrix, 12);
+    if (Math.hypot(x, y, z) < 179.999)
+      for (const [k, angle] of vectorOf(turn.matrix).entries())
+        expect(angle * DEG).toBeCloseTo(turn.rotation_vector_deg[k] ?? 0, 9);
+  });
+});
+
 describe("rotation vector and matrix", () => {
   it.each(golden.rigid.filter(({ expected }) => expected.rotation_vector_deg && expected.R))(
     "agree with scipy: $id",
@@ -48,7 +73,40 @@ describe("rotation vector and matrix", () => {
   });
 });
 
+describe("small turns", () => {
+  it("keep their digits: a thousandth of a second of arc comes back to one part in a million", () => {
+    for (const size of [1e-9, 1e-7, 9e-5, 1.1e-4, 1e-3]) {
+      const [x, y, z] = vectorOf(rotationOf([size, -2 * size, 0.5 * size]));
+      expect(x / size).toBeCloseTo(1, 6);
+      expect(y / size).toBeCloseTo(-2, 6);
+      expect(z / size).toBeCloseTo(0.5, 6);
+    }
+  });
+});
+
 describe("symmetric matrices", () => {
+  it("are made again from their eigenvalues and unit eigenvectors", () => {
+    const part = fc.double({ min: -5, max: 5, noNaN: true });
+    fc.assert(
+      fc.property(fc.array(part, { minLength: 21, maxLength: 21 }), (parts) => {
+        const at = (i: number, j: number) =>
+          parts[(Math.max(i, j) * (Math.max(i, j) + 1)) / 2 + Math.min(i, j)]!;
+        const matrix = Array.from({ length: 6 }, (_, i) => Array.from({ length: 6 }, (__, j) => at(i, j)));
+        const { values, vectors } = symmetricEigen(matrix);
+        for (let i = 0; i < 6; i++)
+          for (let j = 0; j < 6; j++) {
+            const again = values.reduce(
+              (sum, value, k) => sum + value * vectors[i]![k]! * vectors[j]![k]!,
+              0,
+            );
+            expect(again).toBeCloseTo(matrix[i]![j]!, 9);
+            const square = vectors.reduce((sum, row) => sum + row[i]! * row[j]!, 0);
+            expect(square).toBeCloseTo(i === j ? 1 : 0, 10);
+          }
+      }),
+    );
+  });
+
   it("have the eigenvalues of the second difference matrix: 2 - 2 cos(kπ/5)", () => {
     const matrix = Array.from({ length: 4 }, (_, i) =>
       Array.from({ length: 4 }, (__, j) => (i === j ? 2 : Math.abs(i - j) === 1 ? -1 : 0)),

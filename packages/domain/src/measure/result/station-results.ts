@@ -2,14 +2,9 @@ import type { StationResult } from "../../schemas/scan-result.ts";
 import { adaptiveLine, type Estimate } from "../along/adaptive-line.ts";
 import type { JointSeries, Quantity } from "../along/joint-series.ts";
 import type { MeasuredSeam } from "../seam/measure-seam.ts";
+import { nearestSlice, nearMm } from "../seam/nearest-slice.ts";
 import { type SeamFrames, toPart } from "../seam/seam-frames.ts";
 import type { SliceResult } from "../section/measure-slice.ts";
-
-/** A station is measured only where a slice lies within this share of the usual pitch: never across a lost profile. */
-const NEAR_SHARE = 0.6;
-
-/** With a single slice there is no pitch: it speaks for this far, mm. */
-const ALONE_MM = 1;
 
 const DEG = 180 / Math.PI;
 
@@ -25,19 +20,6 @@ export interface StationInput {
   readonly scanner_accuracy_mm: number;
   /** Standard uncertainty that registration leaves at the seam, each axis, mm; 0 where there was none. */
   readonly u_registration_mm: number;
-}
-
-function nearestSlice(at_mm: Float64Array, s_mm: number): number {
-  let low = 0;
-  let high = at_mm.length;
-  while (low < high) {
-    const middle = (low + high) >> 1;
-    if (at_mm[middle]! < s_mm) low = middle + 1;
-    else high = middle;
-  }
-  if (low === 0) return at_mm.length > 0 ? 0 : -1;
-  if (low === at_mm.length) return low - 1;
-  return s_mm - at_mm[low - 1]! <= at_mm[low]! - s_mm ? low - 1 : low;
 }
 
 const round = (value: number, digits: number) => {
@@ -114,7 +96,7 @@ function measuredStation(input: StationInput, j: number, slice: number, result: 
 export function stationResults(input: StationInput): StationResult[] {
   const { seam, frames } = input;
   const { at_mm, pitch_mm, count } = seam.slices;
-  const near_mm = (pitch_mm > 0 ? NEAR_SHARE * pitch_mm : ALONE_MM) + 1e-6;
+  const near_mm = nearMm(pitch_mm);
   return Array.from(frames.stations_mm, (s_mm, j): StationResult => {
     const slice = nearestSlice(at_mm, s_mm);
     if (slice < 0) return { station_mm: s_mm, measured: false, why: "no_points" };

@@ -1,6 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { parseSeamModel, type SeamModel } from "../../schemas/seam-model.ts";
-import { arcModel, cloudOf, straightModel } from "../testing/models.ts";
+import { arcModel, circleModel, cloudOf, straightModel } from "../testing/models.ts";
 import { lineFrames, stationFrames } from "./seam-frames.ts";
 import { sectionPoints } from "./section-points.ts";
 
@@ -11,19 +10,6 @@ const onArc = (s: number, l: number, n: number): Vector => {
   const [c, d] = [Math.cos(s / 100), Math.sin(s / 100)];
   return [(100 - l) * c, (100 - l) * d, n];
 };
-
-/** A whole circle of radius 100 with 40 stations. */
-function circle(): SeamModel {
-  const count = 40;
-  const length_mm = 2 * Math.PI * 100;
-  const open = arcModel(100, length_mm, length_mm / count);
-  const parsed = parseSeamModel({
-    ...open,
-    seam: { ...open.seam, closed: true, vertices: open.seam.vertices.slice(0, count) },
-  });
-  if (!parsed.ok) throw new Error(JSON.stringify(parsed.faults));
-  return parsed.value;
-}
 
 describe("points in the seam's own measure", () => {
   it("stand at their place along a straight line, with lateral and normal", () => {
@@ -48,7 +34,7 @@ describe("points in the seam's own measure", () => {
   });
 
   it("go round a closed seam without a joint at its end", () => {
-    const model = circle();
+    const model = circleModel(100, 40);
     const length = model.seam.length_mm;
     for (const s of [1, length / 2, length - 7, length - 1]) {
       const found = sectionPoints(lineFrames(model), cloudOf([onArc(s, 1, 2)]));

@@ -47,6 +47,18 @@ export const arcModel = (radius_mm: number, length_mm: number, step_mm: number):
     };
   });
 
+/** The same all round: a closed circle whose end joins its start. */
+export function circleModel(radius_mm: number, stations: number): SeamModel {
+  const length_mm = 2 * Math.PI * radius_mm;
+  const open = arcModel(radius_mm, length_mm, length_mm / stations);
+  const parsed = parseSeamModel({
+    ...open,
+    seam: { ...open.seam, closed: true, vertices: open.seam.vertices.slice(0, stations) },
+  });
+  if (!parsed.ok) throw new Error(JSON.stringify(parsed.faults));
+  return parsed.value;
+}
+
 /** Points as a cloud. */
 export function cloudOf(points: readonly Vector[], profiles: readonly number[] | null = null): ScanCloud {
   return {
