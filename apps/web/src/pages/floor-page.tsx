@@ -11,7 +11,7 @@ import { drawingQueries } from "../features/drawings/drawings.queries.ts";
 import { CellSheet } from "../features/floor/cell-sheet.tsx";
 import { useChangedKeys } from "../features/floor/changed-keys.ts";
 import { floorQuery, LIVE_MS } from "../features/floor/floor.queries.ts";
-import { floorValues } from "../features/floor/floor-values.ts";
+import { floorValues, HELD_COUNT, TO_INSPECT_COUNT } from "../features/floor/floor-values.ts";
 import { useNow } from "../features/floor/since-text.tsx";
 import { WaitingSeams } from "../features/floor/waiting-seams.tsx";
 import { partQueries } from "../features/parts/parts.queries.ts";
@@ -107,6 +107,7 @@ function Waiting(props: { floor: Floor; changed: ReadonlySet<string>; now_ms: nu
         none="No seam is held."
         seams={floor.held}
         count={floor.held_count}
+        countKey={HELD_COUNT}
         all={{ to: partsWith("held"), words: "parts with held seams" }}
         {...live}
       />
@@ -117,6 +118,7 @@ function Waiting(props: { floor: Floor; changed: ReadonlySet<string>; now_ms: nu
         none="No welded seam waits for an inspection."
         seams={floor.to_inspect}
         count={floor.to_inspect_count}
+        countKey={TO_INSPECT_COUNT}
         all={{ to: partsWith("welded"), words: "parts with welded seams" }}
         {...live}
       />

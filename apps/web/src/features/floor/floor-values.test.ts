@@ -1,7 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { changedKeys } from "./changed-keys.ts";
 import { cellSpecimen, floorSpecimen, mountSpecimen, seamSpecimen } from "./floor-specimen.ts";
-import { countKey, floorValues, mountKey } from "./floor-values.ts";
+import { countKey, floorValues, HELD_COUNT, mountKey } from "./floor-values.ts";
 
 const before = floorSpecimen();
 const { cell } = cellSpecimen();
@@ -23,9 +23,9 @@ describe("what is marked on the floor", () => {
     expect(changedIn({ mounts: [wire, mountSpecimen("gas")] })).toEqual([mountKey(wire)]);
   });
 
-  it("is a seam that begins to wait", () => {
+  it("is a seam that begins to wait, and the count of those that do", () => {
     const held = seamSpecimen("held");
     const after = floorValues(floorSpecimen({ held: [held], held_count: 1 }));
-    expect([...changedKeys(floorValues(before), after)]).toEqual([held.id]);
+    expect([...changedKeys(floorValues(before), after)].sort()).toEqual([HELD_COUNT, held.id].sort());
   });
 });

@@ -21,6 +21,8 @@ export interface WaitingSeamsProps {
   none: string;
   seams: readonly SeamRow[];
   count: number;
+  /** The key under which the count is marked when it changes. */
+  countKey: string;
   /** Where all of them are. */
   all: { readonly to: string; readonly words: string };
   changed: ReadonlySet<string>;
@@ -35,7 +37,9 @@ export function WaitingSeams(props: WaitingSeamsProps): ReactElement {
       title={props.title}
       aside={
         props.count === 0 ? undefined : (
-          <span className="text-lg">
+          <span
+            className={`-mr-2 px-2 py-1 text-lg ${props.changed.has(props.countKey) ? "kit-changed" : ""}`}
+          >
             <StateMark state={props.state} word={String(props.count)} />
           </span>
         )
