@@ -71,16 +71,6 @@ describe("a clean scan", () => {
     expect(result.verdict).toBe("adapt");
   });
 
-  it("gives the same for the same scan moved with its model", () => {
-    const turn = rotationOf([0.4, -0.7, 0.2]);
-    const move = (p: Vector): Vector => {
-      const [x, y, z] = turned(turn, p);
-      return [x + 300, y - 120, z + 55];
-    };
-    const moved = modelMapped(model, move, (v) => turned(turn, v));
-    expectSame(laterals(evaluated(moved, mapped(scan, move))), laterals(result), 2e-3);
-  });
-
   it("mirrors its signs when scan and model are mirrored", () => {
     const mirror = ([x, y, z]: Vector): Vector => [x, -y, z];
     // The lateral axis is left as it was: the upright now stands on its other side.
@@ -93,28 +83,6 @@ describe("a clean scan", () => {
       worldY,
       result.stations.map((s) => -(s.root_mm?.[1] ?? Number.NaN)),
       2e-3,
-    );
-  });
-
-  it("does not depend on the order of the profiles", () => {
-    const all = points(scan);
-    const order = all.map((_, k) => k).sort((a, b) => (scan.profiles?.[b] ?? 0) - (scan.profiles?.[a] ?? 0));
-    const shuffled = cloudOf(
-      order.map((k) => all[k] ?? [0, 0, 0]),
-      order.map((k) => scan.profiles?.[k] ?? 0),
-    );
-    expectSame(laterals(evaluated(model, shuffled)), laterals(result), 5e-3);
-  });
-
-  it("does not change with points far from the seam", () => {
-    const more = cloudOf([
-      ...points(scan),
-      ...Array.from({ length: 500 }, (_, i): Vector => [i / 10, 90, 40]),
-    ]);
-    expectSame(
-      laterals(evaluated(model, more)),
-      laterals(evaluated(model, { ...scan, profiles: null })),
-      1e-9,
     );
   });
 
