@@ -29,19 +29,19 @@ export interface Real {
   readonly tack_mm: number;
 }
 
-const REACH_MM = 70;
+export const REACH_MM = 70;
 const RAD = Math.PI / 180;
 
 /** From a plate's own axes to the section: turned about the plate's origin, then moved there. */
-const place = (points: readonly Point[], turn_deg: number, [ol, on]: Point): Point[] => {
+export const place = (points: readonly Point[], turn_deg: number, [ol, on]: Point): Point[] => {
   const [c, s] = [Math.cos(turn_deg * RAD), Math.sin(turn_deg * RAD)];
   return points.map(([l, n]): Point => [ol + l * c - n * s, on + l * s + n * c]);
 };
 
-const edges = (points: readonly Point[]): Edge[] =>
+export const edges = (points: readonly Point[]): Edge[] =>
   points.slice(1).map((to, i): Edge => [points[i] ?? to, to]);
 
-const bevelDeg = (design: Design, side: "a" | "b"): number => {
+export const bevelDeg = (design: Design, side: "a" | "b"): number => {
   if (design.joint === "butt_v") return design.groove_deg / 2;
   return design.joint === "butt_half_v" && side === "b" ? design.groove_deg : 0;
 };

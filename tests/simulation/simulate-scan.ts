@@ -26,7 +26,8 @@ export interface Simulated {
   readonly truth: readonly TrueStation[];
 }
 
-const VIEWS: Readonly<Record<JointType, number>> = {
+/** Direction that a joint is looked at from, from plate A's normal toward plate B, degrees. */
+export const VIEWS: Readonly<Record<JointType, number>> = {
   fillet_t: -38,
   corner_closed: -40,
   lap: -30,
@@ -36,7 +37,7 @@ const VIEWS: Readonly<Record<JointType, number>> = {
   butt_square: 3,
 };
 
-function designFor(joint: JointType, random: Random): Design {
+export function designFor(joint: JointType, random: Random): Design {
   const a_mm = random.pick([6, 8, 10, 12]);
   return {
     joint,
@@ -68,10 +69,10 @@ function sectionOf(design: Design, gap_mm: number): object {
   };
 }
 
-type Course = (station_mm: number) => number;
+export type Course = (station_mm: number) => number;
 
 /** A slow change along the seam: offset, slope, wave and, now and then, a step. */
-function course(random: Random, size: number, length_mm: number, stepChance = 0): Course {
+export function course(random: Random, size: number, length_mm: number, stepChance = 0): Course {
   const [offset, slope] = [random.even(-size, size), random.even(-size, size) * 0.5];
   const [wave, period, phase] = [
     random.even(0, 0.3 * size),
@@ -108,21 +109,21 @@ function realityFor(design: Design, line: Line, random: Random, hard: number): (
   });
 }
 
-function spatterOver(line: Line, random: Random, hard: number): { s: number; ball: Ball }[] {
+export function spatterOver(line: Line, random: Random, hard: number): { s: number; ball: Ball }[] {
   return Array.from({ length: Math.round(25 * hard) }, () => ({
     s: random.even(0, line.length_mm),
     ball: { at: [random.even(-12, 12), random.even(-1, 6)] as Point, radius_mm: random.even(0.3, 1.1) },
   }));
 }
 
-function lineFor(random: Random): Line {
+export function lineFor(random: Random): Line {
   const kind = random.pick(["straight", "straight", "arc", "circle"] as const);
   if (kind === "straight") return straight(random.pick([120, 200, 300]));
   const radius_mm = random.pick([60, 120, 150]);
   return arc(radius_mm, kind === "circle" ? 2 * Math.PI * radius_mm : random.even(1.2, 2.2) * radius_mm);
 }
 
-function modelOf(name: string, design: Design, line: Line, pitch_mm: number): SeamModel {
+export function modelOf(name: string, design: Design, line: Line, pitch_mm: number): SeamModel {
   const steps = Math.floor(line.length_mm / pitch_mm + 1e-6);
   const count = line.closed ? steps : steps + 1;
   const parsed = parseSeamModel({

@@ -41,6 +41,10 @@ const units = (): Option =>
   new Option("--units <unit>", "unit that the scan and its poses are written in")
     .choices(["mm", "in", "m"])
     .default("mm");
+const stage = (): Option =>
+  new Option("--stage <stage>", "fit-up before welding, or the finished bead")
+    .choices(["fitup", "bead"])
+    .default("fitup");
 const part = ["--part <tag>", "the part that is meant: refused if the seam is on another"] as const;
 const poses = [
   "--poses <file>",
@@ -60,6 +64,12 @@ program
   .option("--datum <file>", "datum points that bring the scan into the part frame, JSON")
   .option("--by-plates", "bring the scan into the part frame by its own plates")
   .option("--path <file>", "write the corrected path: .csv, or .json")
+  .addOption(stage())
+  .option("--size <mm>", "finished bead: throat of a fillet weld, thickness of a butt weld", positive)
+  .addOption(
+    new Option("--level <level>", "finished bead: quality level of ISO 5817").choices(["B", "C", "D"]),
+  )
+  .addOption(new Option("--edition <year>", "finished bead: edition of ISO 5817").choices(["2014", "2023"]))
   .addOption(json())
   .addHelpText(
     "after",
@@ -69,6 +79,7 @@ Exit: 0 within or adapt, 10 hold, 2 unreadable input
   beadroll evaluate --model nominal.json --scan profiles.csv
   beadroll evaluate --model nominal.json --scan cloud.ply --json | jq .verdict
   beadroll evaluate --model nominal.json --scan cloud.ply --datum datum.json --path path.csv
+  beadroll evaluate --model nominal.json --scan bead.ply --stage bead --size 5 --level C
 
 datum.json: [{"nominal": [x, y, z], "measured": [x, y, z]}, …], at least three, mm.
 The path is advice for the welding coordinator, no command to a robot.`,
@@ -133,11 +144,7 @@ push
   .requiredOption("--seam <tag>", "tag of the seam")
   .requiredOption(...scan)
   .option(...poses)
-  .addOption(
-    new Option("--stage <stage>", "fit-up before welding, or the finished bead")
-      .choices(["fitup", "bead"])
-      .default("fitup"),
-  )
+  .addOption(stage())
   .addOption(units())
   .option("--taken-at <instant>", "when it was taken, with its zone; now if absent")
   .option(...part)

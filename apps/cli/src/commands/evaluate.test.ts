@@ -1,10 +1,11 @@
 import { writeFile } from "node:fs/promises";
 import { join } from "node:path";
 import { gzipSync } from "node:zlib";
+import { BeadResult } from "@beadroll/domain/schemas/bead-result";
 import { ScanResult } from "@beadroll/domain/schemas/scan-result";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import { type BuiltCommand, builtCommand } from "../testing/built-command.ts";
-import { aModel, aScan } from "../testing/joint.ts";
+import { aBead, aModel, aScan } from "../testing/joint.ts";
 
 let command: BuiltCommand;
 const write = (name: string, content: string | Uint8Array): Promise<void> =>
@@ -133,5 +134,46 @@ describe("evaluate of what cannot be read", () => {
     expect(ran.exit).toBe(2);
     expect(ran.stderr).toContain(words);
     expect(JSON.parse(ran.stdout)).toHaveProperty("detail");
+  });
+});
+
+describe("evaluate --stage bead", () => {
+  beforeAll(async () => {
+    await write("bead.xyz", aBead());
+    await write("cut.xyz", aBead({ undercut_mm: 0.9 }));
+    const weld = { weld_size_mm: 5, quality_level: "B" };
+    await write("with-weld.json", JSON.stringify({ ...aModel(), weld }));
+  });
+  const asked = ["--stage", "bead", "--size", "5", "--level", "C"];
+
+  it("measures the finished weld and ends with 0 where it keeps its level", async () => {
+    const ran = await evaluate("--scan", "bead.xyz", ...asked);
+    expect(ran).toMatchObject({ exit: 0, stderr: "" });
+    expect(ran.stdout).toMatch(/^■ within {3}test-t-joint {3}finished fillet t/);
+    expect(ran.stdout).toMatch(/ {2}leg A mm +7\.20 +7\.20 +7\.20/);
+  });
+
+  it("ends with 10 and names the imperfection where it does not", async () => {
+    const ran = await evaluate("--scan", "cut.xyz", ...asked, "--json");
+    expect(ran.exit).toBe(10);
+    const result = BeadResult.parse(JSON.parse(ran.stdout));
+    const [worst] = result.findings;
+    expect(worst).toMatchObject({ code: "5011", plate: "b", state: "not_met", limit: 0.5 });
+    expect(worst?.value).toBeCloseTo(0.9, 1);
+  });
+
+  it("judges by what the model says of the weld, and refuses to guess where nothing does", async () => {
+    const model = await command.run([
+      "evaluate",
+      ...["--model", "with-weld.json", "--scan", "bead.xyz", "--stage", "bead", "--json"],
+    ]);
+    expect(BeadResult.parse(JSON.parse(model.stdout)).requirement).toEqual({
+      weld_size_mm: 5,
+      quality_level: "B",
+      edition: "2023",
+    });
+    const ran = await evaluate("--scan", "bead.xyz", "--stage", "bead");
+    expect(ran.exit).toBe(2);
+    expect(ran.stderr).toMatch(/--size and --level/);
   });
 });

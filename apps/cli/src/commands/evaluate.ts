@@ -1,13 +1,18 @@
 import { writeFile } from "node:fs/promises";
+import { evaluateBead } from "@beadroll/domain/measure/bead/evaluate-bead";
 import { evaluateScan } from "@beadroll/domain/measure/evaluate";
 import { correctedPath, pathCsv } from "@beadroll/domain/measure/path/corrected-path";
 import type { Registering } from "@beadroll/domain/measure/register/register-scan";
+import type { ScanCloud } from "@beadroll/domain/measure/scan-cloud";
+import type { Iso5817Edition, QualityLevel } from "@beadroll/domain/quality/iso-5817/limit";
+import type { BeadRequirement } from "@beadroll/domain/schemas/bead-requirement";
 import type { ScanResult } from "@beadroll/domain/schemas/scan-result";
 import type { SeamModel } from "@beadroll/domain/schemas/seam-model";
 import { EXIT } from "../exit-codes.ts";
 import { readDatums } from "../input/read-datums.ts";
 import { readModel } from "../input/read-model.ts";
 import { readPoints, readScanFiles, type ScanOptions } from "../input/scan-files.ts";
+import { beadText } from "../output/bead-text.ts";
 import { evaluationText } from "../output/evaluation-text.ts";
 import { stopOnFaults } from "../output/fault-text.ts";
 import type { Look } from "../output/look.ts";
@@ -21,6 +26,10 @@ export interface EvaluateOptions extends ScanOptions {
   readonly datum?: string;
   readonly byPlates?: boolean;
   readonly path?: string;
+  readonly stage?: "fitup" | "bead";
+  readonly size?: number;
+  readonly level?: QualityLevel;
+  readonly edition?: Iso5817Edition;
 }
 
 /** How the scan is brought into the part frame, if it must be. */
@@ -40,6 +49,46 @@ async function writePath(file: string, model: SeamModel, result: ScanResult, ste
   return `Corrected path of ${path.points.length} points written to ${file}${gaps}`;
 }
 
+/** What the weld is judged by: the options, or what the model says under `weld`. */
+function requirementOf(options: EvaluateOptions, model: SeamModel): BeadRequirement {
+  const weld_size_mm = options.size ?? model.weld?.weld_size_mm;
+  const quality_level = options.level ?? model.weld?.quality_level;
+  const edition = options.edition ?? model.weld?.edition ?? "2023";
+  if (weld_size_mm === undefined || quality_level === undefined)
+    return stop(EXIT.usage, {
+      error: "usage",
+      detail: "--stage bead needs --size and --level: the model says nothing under weld",
+    });
+  return { weld_size_mm, quality_level, edition };
+}
+
+/** Measures a scan of the finished weld and judges it. */
+function evaluateFinished(
+  options: EvaluateOptions,
+  model: SeamModel,
+  cloud: ScanCloud,
+  paths: readonly string[],
+  look: Look,
+): CommandOutcome {
+  if (options.path !== undefined || options.datum !== undefined || options.byPlates === true)
+    return stop(EXIT.usage, {
+      error: "usage",
+      detail: "--path, --datum and --by-plates are for scans of the fit-up",
+    });
+  const outcome = evaluateBead(model, cloud, {
+    requirement: requirementOf(options, model),
+    ...(options.step !== undefined && { step_mm: options.step }),
+    ...(options.accuracy !== undefined && { scanner_accuracy_mm: options.accuracy }),
+  });
+  if (!outcome.ok) return stopOnFaults(outcome.faults, paths);
+  const { verdict } = outcome.value;
+  return {
+    exit: verdict === "hold" ? EXIT.hold : EXIT.done,
+    json: outcome.value,
+    text: beadText(outcome.value, model, look),
+  };
+}
+
 /** Measures a scan against its model, without a server. */
 export async function evaluate(options: EvaluateOptions, look: Look): Promise<CommandOutcome> {
   const model = await readModel(options.model);
@@ -47,6 +96,8 @@ export async function evaluate(options: EvaluateOptions, look: Look): Promise<Co
   const paths = poses === null ? [scan.path] : [scan.path, poses.path];
   const cloud = readPoints(scan, poses, options.units);
   if (!cloud.ok) return stopOnFaults(cloud.faults, paths);
+  if (options.stage === "bead")
+    return { ...evaluateFinished(options, model, cloud.value, paths, look), talk };
   const registering = await registeringOf(options);
   const outcome = evaluateScan(model, cloud.value, {
     ...(registering && { registering }),

@@ -68,3 +68,19 @@ export function aLog(current_a = 250): string {
   }
   return `${lines.join("\n")}\n`;
 }
+
+/** A clean scan of the same joint once welded: a flat fillet with legs of 7.2 mm, and an undercut if asked for. */
+export function aBead({ undercut_mm = 0, length_mm = 40 } = {}): string {
+  const leg_mm = 7.2;
+  const cloud: string[] = [];
+  for (let x = 0; x <= length_mm; x += 1) {
+    const put = (y: number, z: number) => cloud.push(`${x} ${(100 + y).toFixed(4)} ${z.toFixed(4)}`);
+    for (let d = leg_mm; d <= 19; d += 0.1) {
+      const dip = d < leg_mm + 1.6 ? (undercut_mm * (1 - Math.cos((Math.PI * (d - leg_mm)) / 0.8))) / 2 : 0;
+      put(-d, 0);
+      put(dip, d);
+    }
+    for (let share = 0; share <= 1; share += 0.01) put(-leg_mm * (1 - share), leg_mm * share);
+  }
+  return `${cloud.join("\n")}\n`;
+}

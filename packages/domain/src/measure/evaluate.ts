@@ -2,6 +2,7 @@ import { good, type Outcome, refused } from "../faults/fault.ts";
 import type { ScanResult } from "../schemas/scan-result.ts";
 import type { SeamModel } from "../schemas/seam-model.ts";
 import { jointSeries } from "./along/joint-series.ts";
+import { MEASURE_ENGINE } from "./engine.ts";
 import { judgeScan } from "./judge/judge-scan.ts";
 import { type Registering, registerScan } from "./register/register-scan.ts";
 import { endsOf } from "./result/ends.ts";
@@ -14,9 +15,6 @@ import type { ScanCloud } from "./scan-cloud.ts";
 import { type MeasuredSeam, measureSeam } from "./seam/measure-seam.ts";
 import { stationFrames } from "./seam/seam-frames.ts";
 import { unitMistake } from "./units-check.ts";
-
-/** Name and version of the measuring code; the version changes whenever a number might. */
-export const MEASURE_ENGINE = "beadroll-measure 1.0.0";
 
 /** How a scan is to be evaluated. */
 export interface EvaluateOptions {

@@ -4,6 +4,7 @@ import type { Face, JointFaces } from "./joints/joint-faces.ts";
 import { BLIND_WORDS } from "./judge/coverage-reasons.ts";
 import type { MeasuredSeam } from "./seam/measure-seam.ts";
 import { sliceAt } from "./seam/measure-slices.ts";
+import { nearestSlice } from "./seam/nearest-slice.ts";
 import type { SectionSlice } from "./section/face-fit.ts";
 import type { SliceResult } from "./section/measure-slice.ts";
 
@@ -89,14 +90,6 @@ function plates(joint: JointFaces, result: SliceResult): SectionView["plates"] {
   });
 }
 
-function nearest(seam: MeasuredSeam, station_mm: number): number {
-  let best = -1;
-  seam.slices.at_mm.forEach((at, i) => {
-    if (best < 0 || Math.abs(at - station_mm) < Math.abs(seam.slices.at_mm[best]! - station_mm)) best = i;
-  });
-  return best;
-}
-
 /**
  * The cross-section nearest to a station: its points, kept or rejected with why, the fitted faces and the root.
  * Fitted by itself and with its neighbours' help as the evaluation does, not smoothed along the seam.
@@ -105,7 +98,7 @@ function nearest(seam: MeasuredSeam, station_mm: number): number {
 export function sectionAt(seam: MeasuredSeam, station_mm: number): SectionView {
   const { profile } = seam.joint;
   const outline = [profile.plate_a, profile.plate_b].map((line) => line.map(([l, n]): Point => [l, n]));
-  const index = nearest(seam, station_mm);
+  const index = nearestSlice(seam.slices.at_mm, station_mm);
   const outcome = seam.outcomes[index];
   const result = outcome?.found ? outcome.result : null;
   const points =

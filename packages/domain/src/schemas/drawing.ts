@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { QUALITY_LEVELS } from "../quality/iso-5817/limit.ts";
 import { id, instant, lengthMm, line, version } from "./quantities.ts";
 import { DEFAULT_LIMITS, JointType, SeamLimits, SeamModel } from "./seam-model.ts";
 
@@ -35,7 +36,6 @@ export const DrawingPatch = z
 export type DrawingPatch = z.infer<typeof DrawingPatch>;
 
 export const SCAN_RULES = ["always", "sample", "never"] as const;
-export const QUALITY_LEVELS = ["B", "C", "D"] as const;
 
 const modelSeamFields = {
   number: line("Seam number on the drawing", "S4", 12),

@@ -1,5 +1,6 @@
 import { z } from "zod";
 import { type Fault, good, type Outcome, refused } from "../faults/fault.ts";
+import { BeadRequirement } from "./bead-requirement.ts";
 import { lengthMm } from "./quantities.ts";
 import { checkVertices } from "./seam-vertices.ts";
 
@@ -161,6 +162,7 @@ export const SeamModel = z
       .meta({ description: "Nominal line" }),
     section: SeamSection,
     limits: SeamLimits.optional(),
+    weld: BeadRequirement.optional(),
   })
   .meta({ id: "SeamModel", description: "A seam as designed" });
 export type SeamModel = z.infer<typeof SeamModel>;

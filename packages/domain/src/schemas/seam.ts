@@ -1,5 +1,6 @@
 import { z } from "zod";
-import { ModelSeam, QUALITY_LEVELS } from "./drawing.ts";
+import { QUALITY_LEVELS } from "../quality/iso-5817/limit.ts";
+import { ModelSeam } from "./drawing.ts";
 import { Inspection } from "./inspection.ts";
 import { PassRecord } from "./pass.ts";
 import { id, instant, lengthMm, line } from "./quantities.ts";

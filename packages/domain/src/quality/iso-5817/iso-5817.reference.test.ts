@@ -2,7 +2,7 @@ import fc from "fast-check";
 import { describe, expect, it } from "vitest";
 import { weldChecks } from "../../../vectors/weld/checks.ts";
 import { IMPERFECTIONS } from "./imperfections.ts";
-import { ISO_5817_EDITIONS, LEVELS, type Limit } from "./limit.ts";
+import { ISO_5817_EDITIONS, type Limit, QUALITY_LEVELS } from "./limit.ts";
 import { limitOf } from "./limit-of.ts";
 
 const checks = ["5011", "502", "503", "504", "505", "506", "509", "512", "515", "5013", "5071", "5072"]
@@ -29,7 +29,7 @@ describe("limits of ISO 5817 Table 1", () => {
   it.each(checks.map((check) => [check.title, check] as const))("%s", (title, check) => {
     const size = (name: string) => (check.value(name) === undefined ? {} : { [name]: check.input(name) });
     const [code = ""] = String(check.value("imperfection")).split("/");
-    const level = LEVELS.find((one) => one === check.value("level"));
+    const level = QUALITY_LEVELS.find((one) => one === check.value("level"));
     const edition = ISO_5817_EDITIONS.find((one) => one === check.value("edition"));
     if (!level) throw new Error(`${title}: no level`);
     const sizes = Object.assign({}, ...["t_mm", "a_mm", "s_mm", "b_mm"].map(size));
@@ -68,7 +68,7 @@ describe("limits of ISO 5817 Table 1", () => {
         size,
         fc.boolean(),
         (one, t, a, b, fillet) => {
-          const [B, C, D] = LEVELS.map((level) =>
+          const [B, C, D] = QUALITY_LEVELS.map((level) =>
             allowed(
               limitOf({ code: one.code, level, t_mm: t, a_mm: a, s_mm: a, b_mm: b, is_fillet: fillet }).limit,
             ),

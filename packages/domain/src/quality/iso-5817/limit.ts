@@ -3,8 +3,8 @@ export const ISO_5817_EDITIONS = ["2014", "2023"] as const;
 export type Iso5817Edition = (typeof ISO_5817_EDITIONS)[number];
 
 /** Quality levels, the strictest first. */
-export const LEVELS = ["B", "C", "D"] as const;
-export type QualityLevel = (typeof LEVELS)[number];
+export const QUALITY_LEVELS = ["B", "C", "D"] as const;
+export type QualityLevel = (typeof QUALITY_LEVELS)[number];
 
 /**
  * What a level allows of an imperfection.
