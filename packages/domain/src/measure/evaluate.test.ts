@@ -1,9 +1,13 @@
 import { describe, expect, it } from "vitest";
 import type { ScanResult } from "../schemas/scan-result.ts";
-import { parseSeamModel, type SeamModel } from "../schemas/seam-model.ts";
+import { JOINT_TYPES, parseSeamModel, type SeamModel } from "../schemas/seam-model.ts";
 import { evaluateScan } from "./evaluate.ts";
+import { drawsFrom } from "./fit/consensus-line.ts";
+import { jointFaces } from "./joints/joint-faces.ts";
+import type { SectionPoint } from "./joints/nominal-profile.ts";
 import { rotationOf, turned, type Vector } from "./result/rotation.ts";
 import type { ScanCloud } from "./scan-cloud.ts";
+import { jointModel, pointsOn, SECTIONS, scanOf } from "./testing/joints.ts";
 import { cloudOf, scanOfT, straightModel } from "./testing/models.ts";
 
 const model = straightModel(60, 2);
@@ -195,5 +199,34 @@ describe("bad geometry never gives a number", () => {
       mapped(scanOfT(60), ([x, y, z]) => [x * factor, y * factor, z * factor]),
     );
     expect(outcome.ok ? [] : outcome.faults.map((fault) => fault.code)).toEqual(["scan-units-implausible"]);
+  });
+});
+
+describe.each(JOINT_TYPES)("a %s is never read out of what is none", (type) => {
+  const joint_model = jointModel(type, SECTIONS[type], { length_mm: 40, step_mm: 2 });
+  const joint = jointFaces(joint_model);
+  const draw = drawsFrom(9);
+  const row = (at: (t: number) => SectionPoint) => Array.from({ length: 200 }, (_, i) => at(i / 5 - 20));
+  const onPlate = (plate: "a" | "b") => (_: number, index: number) =>
+    pointsOn({ ...joint, faces: joint.faces.filter((face) => face.plate === plate) }, { seed: index + 1 });
+
+  it.each<[string, (x: number, index: number) => readonly SectionPoint[]]>([
+    ["plate A alone", onPlate("a")],
+    ["plate B alone", onPlate("b")],
+    ["a flat table", () => row((t) => [t, 0.3 + 0.02 * draw()])],
+    ["a flat plate as high as the surface", () => row((t) => [t, 8 + 0.02 * draw()])],
+    ["a wall", () => row((t) => [0.3 + 0.02 * draw(), t])],
+    ["points without order", () => row(() => [60 * draw() - 30, 60 * draw() - 30])],
+    [
+      "many points without order",
+      () => Array.from({ length: 2000 }, (): SectionPoint => [40 * draw() - 20, 40 * draw() - 20]),
+    ],
+    ["one point in each profile", () => [[-3, 0.01]]],
+    ["one place all over", () => row(() => [-3, 0])],
+  ])("%s", (_name, section) => {
+    const result = evaluated(joint_model, scanOf(40, section));
+    expect(result.stations.filter((station) => station.measured)).toEqual([]);
+    expect(result.verdict).toBe("hold");
+    expect(result.reasons.map((reason) => reason.check)).toContain("coverage");
   });
 });
