@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { cloudOf, straightModel } from "../testing/models.ts";
+import { circleModel, cloudOf, straightModel } from "../testing/models.ts";
 import { lineFrames } from "./seam-frames.ts";
 import { sectionPoints } from "./section-points.ts";
 import { slicesOf } from "./slices.ts";
@@ -43,6 +43,58 @@ describe("slices", () => {
     const slices = cut(Array.from({ length: 8000 }, (_, i): Vector => [i / 200, (i % 37) - 18, 0]));
     expect(slices.count).toBe(40);
     expect(slices.pitch_mm).toBeCloseTo(1, 1);
+  });
+
+  it("keep the points of each profile together, in their order", () => {
+    const slices = cut(
+      [20, 0].flatMap((x) => profile(x).map(([px, l, n]): Vector => [px, l, x + n])),
+      [20, 0].flatMap((_, k) => Array.from({ length: 30 }, () => k)),
+    );
+    expect([...slices.l_mm.subarray(0, 30)]).toEqual(profile(0).map(([, l]) => l));
+    expect(new Set(slices.n_mm.subarray(30))).toEqual(new Set([20]));
+  });
+
+  it("cut a dense cloud so that no point is lost and each slice holds its own stretch", () => {
+    const points = Array.from(
+      { length: 20_000 },
+      (_, i): Vector => [((i * 7919) % 20_000) / 400, (i % 37) - 18, 0],
+    );
+    const slices = cut(points);
+    expect(slices.starts.at(-1)).toBe(20_000);
+    expect(slices.count).toBe(50);
+    expect(slices.at_mm.every((at, i) => Math.abs(at - i - 0.5) < 0.2)).toBe(true);
+  });
+
+  it("cut a cloud of slanting profiles, each wider than the way to the next, as a dense one", () => {
+    // Each line of points runs 6 mm along the seam while the next begins after 2 mm.
+    const slanting = Array.from({ length: 20 }, (_, k) =>
+      Array.from({ length: 120 }, (__, i): Vector => [2 * k + i / 20, i / 4 - 15, 0]),
+    ).flat();
+    const slices = cut(slanting);
+    expect(slices.pitch_mm).toBeCloseTo(1, 1);
+    expect(slices.starts.at(-1)).toBe(slanting.length);
+  });
+
+  it("go round a closed seam: the profile over its end is one slice, not two", () => {
+    const round = circleModel(100, 40);
+    const length = round.seam.length_mm;
+    const at = (s: number, l: number): Vector => [
+      (100 - l) * Math.cos(s / 100),
+      (100 - l) * Math.sin(s / 100),
+      0,
+    ];
+    const places = [length - 0.02, 10, 20, 30];
+    const points = places.flatMap((s) => Array.from({ length: 31 }, (_, i) => at(s + 0.002 * i, i - 15)));
+    const profiles = places.flatMap((_, k) => Array.from({ length: 31 }, () => k));
+    const slices = slicesOf(sectionPoints(lineFrames(round), cloudOf(points, profiles)));
+    expect(slices.count).toBe(4);
+    expect(Array.from(slices.starts)).toEqual([0, 31, 62, 93, 124]);
+    expect(Array.from(slices.at_mm, (s) => Math.round(s % length))).toEqual([0, 10, 20, 30]);
+  });
+
+  it("of one profile have no pitch", () => {
+    const one = cut(profile(10));
+    expect([one.count, one.pitch_mm]).toEqual([1, 0]);
   });
 
   it("are none of no points", () => expect(cut([[0, 900, 0]]).count).toBe(0));

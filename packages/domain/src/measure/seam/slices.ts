@@ -49,8 +49,7 @@ function meansOf(points: SectionPoints, groups: Int32Array, count: number) {
 
 /** Profiles by their mean place, neighbours closer than the finest pitch joined. */
 function slicesOfProfiles(points: SectionPoints, profiles: Int32Array): Int32Array {
-  let most = 0;
-  for (const profile of profiles) most = Math.max(most, profile);
+  const most = largest(profiles);
   const { means_mm, sizes } = meansOf(points, profiles, most + 1);
   const order = Array.from(sizes.keys())
     .filter((profile) => sizes[profile]! > 0)
@@ -66,7 +65,16 @@ function slicesOfProfiles(points: SectionPoints, profiles: Int32Array): Int32Arr
     }
     groups[profile] = group;
   }
-  return Int32Array.from(profiles, (profile) => groups[profile]!);
+  const numbers = new Int32Array(profiles.length);
+  for (let k = 0; k < numbers.length; k++) numbers[k] = groups[profiles[k]!]!;
+  return numbers;
+}
+
+/** The largest of some whole numbers, none of them negative. */
+function largest(numbers: Int32Array): number {
+  let most = 0;
+  for (let k = 0; k < numbers.length; k++) if (numbers[k]! > most) most = numbers[k]!;
+  return most;
 }
 
 /** Runs of places with points, between places without any: the profiles of a cloud that was taken as profiles. */
@@ -84,17 +92,25 @@ function runsOf(filled: Uint8Array): [from: number, to: number][] {
   return runs;
 }
 
-/** A cloud's slices: its profiles where empty places part them, else even slices. */
-function slicesOfCloud(points: SectionPoints): Int32Array {
+/** The grain of the seam that each point lies in, counted from the first, and how many grains there are. */
+function grainsOf({ s_mm, count }: SectionPoints): { readonly grains: Int32Array; readonly bins: number } {
   let least = Number.POSITIVE_INFINITY;
   let most = Number.NEGATIVE_INFINITY;
-  for (const s of points.s_mm) {
+  for (let k = 0; k < count; k++) {
+    const s = s_mm[k]!;
     if (s < least) least = s;
     if (s > most) most = s;
   }
-  const bins = Math.max(1, Math.ceil((most - least) / GRAIN_MM) + 1);
+  const grains = new Int32Array(count);
+  for (let k = 0; k < count; k++) grains[k] = Math.floor((s_mm[k]! - least) / GRAIN_MM);
+  return { grains, bins: Math.max(1, Math.ceil((most - least) / GRAIN_MM) + 1) };
+}
+
+/** A cloud's slices: its profiles where empty places part them, else even slices. */
+function slicesOfCloud(points: SectionPoints): Int32Array {
+  const { grains, bins } = grainsOf(points);
   const filled = new Uint8Array(bins);
-  for (const s of points.s_mm) filled[Math.floor((s - least) / GRAIN_MM)] = 1;
+  for (let k = 0; k < points.count; k++) filled[grains[k]!] = 1;
   const runs = runsOf(filled);
   const usual_mm = medianOf(runs.map(([from, to]) => to - from)) * GRAIN_MM;
   const parted = runs.length >= 3 && usual_mm <= CLOUD_SLICE_MM;
@@ -110,7 +126,8 @@ function slicesOfCloud(points: SectionPoints): Int32Array {
     end = to;
   }
   groupOf.fill(group - 1, end);
-  return Int32Array.from(points.s_mm, (s) => groupOf[Math.floor((s - least) / GRAIN_MM)]!);
+  for (let k = 0; k < points.count; k++) grains[k] = groupOf[grains[k]!]!;
+  return grains;
 }
 
 /**
@@ -132,8 +149,7 @@ export function slicesOf(points: SectionPoints): Slices {
 }
 
 function sorted(points: SectionPoints, groups: Int32Array): Slices {
-  let most = 0;
-  for (const group of groups) if (group > most) most = group;
+  const most = largest(groups);
   const { means_mm, sizes } = meansOf(points, groups, most + 1);
   const present = Array.from(sizes.keys()).filter((group) => sizes[group]! > 0);
   const rank = new Int32Array(most + 1);
