@@ -92,11 +92,15 @@ function room(count: number): typeof scratch {
 }
 
 /** Robust spread of the points about a line, those farther than `band_mm` left out. */
-function scaleAbout(line: Line, points: Points, band_mm: number): number {
-  const { residuals } = room(points.count);
+function scaleAbout(line: Line, { ts, ds, count }: Points, band_mm: number): number {
+  const { residuals } = room(count);
+  const { t_mm, d_mm } = line;
+  // As distanceFrom, the turn found once for all points.
+  const cos = Math.cos(line.angle_rad);
+  const sin = Math.sin(line.angle_rad);
   let used = 0;
-  for (let i = 0; i < points.count; i++) {
-    const r = Math.abs(distanceFrom(line, points.ts[i]!, points.ds[i]!));
+  for (let i = 0; i < count; i++) {
+    const r = Math.abs((ds[i]! - d_mm) * cos - (ts[i]! - t_mm) * sin);
     if (r <= band_mm) residuals[used++] = r;
   }
   return used === 0
