@@ -1,5 +1,6 @@
 import { consensusLine } from "../fit/consensus-line.ts";
 import { type FittedLine, type Line, offsetLine, robustLine } from "../fit/line-fit.ts";
+import { selectKth } from "../fit/median.ts";
 import type { Face } from "../joints/joint-faces.ts";
 
 /** Points of one section: a stretch of the slices' arrays. */
@@ -96,9 +97,40 @@ export function fitFace(slice: SectionSlice, face: Face, search: FaceSearch): Fi
   return fitted;
 }
 
+/** Steps of a nearly ordered run that are put right one by one; a run that needs more is sorted. */
+const FEW_MOVES = 8;
+
+/**
+ * Sorts places along a face. A scanner gives them nearly in order, forward or backward, so moving the few stray ones
+ * is most often enough.
+ */
+function sortedRun(ts: Float64Array): Float64Array {
+  const count = ts.length;
+  if (count > 1 && ts[0]! > ts[count - 1]!) ts.reverse();
+  let moves = FEW_MOVES * count;
+  for (let i = 1; i < count; i++) {
+    const t = ts[i]!;
+    let k = i;
+    for (; k > 0 && ts[k - 1]! > t; k--) ts[k] = ts[k - 1]!;
+    ts[k] = t;
+    moves -= i - k;
+    if (moves < 0) return ts.sort();
+  }
+  return ts;
+}
+
+/** The median step of a growing run, the upper middle of an even count; 0 of a single place. */
+function usualStep(ts: Float64Array): number {
+  const { ds: steps } = room;
+  const count = ts.length - 1;
+  if (count < 1) return 0;
+  for (let i = 0; i < count; i++) steps[i] = ts[i + 1]! - ts[i]!;
+  return selectKth(steps, count, count >> 1);
+}
+
 /** Places of the points on a face, mm along it, in growing order. */
 export function alongFace(slice: SectionSlice, face: Face, search: FaceSearch): Float64Array {
-  return room.ts.slice(0, gather(slice, face, search)).sort();
+  return sortedRun(room.ts.slice(0, gather(slice, face, search)));
 }
 
 /** Where a face's points begin, seen from the root. */
@@ -126,8 +158,7 @@ export function faceEnd(
   const ts = alongFace(slice, face, { line, band_mm, from_mm, to_mm: face.length_mm + 8 });
   const count = ts.length;
   if (count < END_POINTS) return null;
-  const steps = Array.from({ length: count - 1 }, (_, i) => ts[i + 1]! - ts[i]!).sort((a, b) => a - b);
-  const spacing_mm = Math.max(1e-3, steps[steps.length >> 1] ?? 0);
+  const spacing_mm = Math.max(1e-3, usualStep(ts));
   // A ghost or spike stands alone: the end is where four points follow within eight usual steps.
   for (let i = 0; i + 4 < count; i++)
     if (ts[i + 4]! - ts[i]! <= 8 * spacing_mm && ts[i + 1]! - ts[i]! <= 3 * spacing_mm)
