@@ -31,8 +31,17 @@ export function medianInPlace(values: Float64Array, count: number): number {
   return count > 0 ? selectKth(values, count, (count - 1) >> 1) : Number.NaN;
 }
 
+let copied = new Float64Array(64);
+
+/** Some values in an array that may be reordered; it serves again at the next call. */
+function copyOf(values: ArrayLike<number>): Float64Array {
+  const { length } = values;
+  if (copied.length < length) copied = new Float64Array(2 * length);
+  for (let i = 0; i < length; i++) copied[i] = values[i]!;
+  return copied;
+}
+
 /** The median of some values; they stay as they are. NaN of none. */
 export function medianOf(values: ArrayLike<number>): number {
-  const copy = Float64Array.from(values);
-  return medianInPlace(copy, copy.length);
+  return medianInPlace(copyOf(values), values.length);
 }
