@@ -94,6 +94,25 @@ describe("values settled along the seam", () => {
     expect(adaptiveLine(torn, 35, 35, 1).value).toBeCloseTo(1, 1);
   });
 
+  it("are on either side of a blind stretch what they would be without the other", () => {
+    const torn = series(60, (x) => 0.01 * x, 0.02);
+    for (let i = 25; i < 28; i++) torn.values[i] = Number.NaN;
+    const [before, after] = [[0, 25] as const, [28, 60] as const].map(([from, to]) => ({
+      at_mm: torn.at_mm.slice(from, to),
+      values: torn.values.slice(from, to),
+      u: torn.u.slice(from, to),
+    }));
+    if (!before || !after) throw new Error("no series");
+    for (const i of [20, 24]) expect(adaptiveLine(torn, i, i, 1)).toEqual(adaptiveLine(before, i, i, 1));
+    for (const i of [28, 32]) expect(adaptiveLine(torn, i, i, 1)).toEqual(adaptiveLine(after, i - 28, i, 1));
+  });
+
+  it("reach across one lost slice", () => {
+    const whole = series(60, () => 0, 0.02);
+    const holed = { ...whole, values: whole.values.map((value, i) => (i === 33 ? Number.NaN : value)) };
+    expect(adaptiveLine(holed, 30, 30, 1).u).toBeLessThan(0.6 * 0.02);
+  });
+
   it("keep what does not average out", () => {
     const floored = { ...series(100, () => 0, 0.02), floor_u: new Float64Array(100).fill(0.05) };
     expect(adaptiveLine(floored, 50, 50, 1).u).toBeGreaterThan(0.05);

@@ -52,7 +52,8 @@ describe("consensus line", () => {
       return consensusLine(ts, ds, 100, SEARCH)?.share ?? 0;
     };
     expect(share(0)).toBeGreaterThan(0.85);
-    expect(share(0)).toBeLessThanOrEqual(1);
+    // A point counts by how near it lies, not only by whether: noise of a fifth of the band costs a twenty-fifth.
+    expect(share(0)).toBeLessThan(0.985);
     expect(share(40)).toBeLessThan(0.72);
     expect(share(40)).toBeGreaterThan(0.45);
   });

@@ -87,6 +87,16 @@ describe("the mismatch", () => {
       expect(found.normal_mm).toBeCloseTo(0.4, 10);
     },
   );
+
+  it.each(["butt_v", "butt_half_v", "butt_square"] as const)(
+    "of a %s is measured along plate A's own normal, however the joint is turned",
+    (type) => {
+      const [s, c] = [Math.sin(6 * RAD), Math.cos(6 * RAD)];
+      const found = at(type, { a: [0, 0, 6], b: [-0.8 * s, 0.8 * c, 6] });
+      expect(found.mismatch_mm).toBeCloseTo(0.8, 10);
+      expect(found.gap_mm).toBeCloseTo(2, 10);
+    },
+  );
 });
 
 it("is no root when faces that should meet are parallel, or one is missing", () => {

@@ -194,6 +194,12 @@ describe("what remains", () => {
     expect(left((x) => [0, 0.3 * arch(x)]).bend_normal_mm).toBeCloseTo(0.3, 3);
   });
 
+  it("takes no S for a bow: its middle lies on the chord of its ends", () => {
+    const swung = left((x) => [0.5 * ((x - 50) / 50) ** 3, 0]);
+    expect(swung.bend_lateral_mm).toBeCloseTo(0, 3);
+    expect(swung.max_abs_mm).toBeGreaterThan(0.1);
+  });
+
   it("takes no slope for a bow", () => {
     const sloped = left((x) => [0.01 * x, -0.02 * x]);
     expect([sloped.bend_lateral_mm, sloped.bend_normal_mm, sloped.max_abs_mm]).toEqual([0, 0, 0]);

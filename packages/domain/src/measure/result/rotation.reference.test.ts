@@ -74,6 +74,11 @@ describe("rotation vector and matrix", () => {
 });
 
 describe("small turns", () => {
+  it("are rotations to the last digits, on both sides of where the series takes over", () => {
+    for (const size of [1e-6, 9e-5, 1.1e-4, 1e-2])
+      for (const row of rotationOf([size, 0, 0])) expect(Math.hypot(...row)).toBeCloseTo(1, 12);
+  });
+
   it("keep their digits: a thousandth of a second of arc comes back to one part in a million", () => {
     for (const size of [1e-9, 1e-7, 9e-5, 1.1e-4, 1e-3]) {
       const [x, y, z] = vectorOf(rotationOf([size, -2 * size, 0.5 * size]));

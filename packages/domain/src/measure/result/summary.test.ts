@@ -35,6 +35,16 @@ describe("coverage", () => {
     expect(coverageOf(seam(shown)).longest_blind_mm).toBe(longest_blind_mm);
   });
 
+  it("takes no long way between two measured stations for a blind one", () => {
+    const uneven = [seen(0), blind(5), seen(10), seen(95), seen(100)];
+    expect(coverageOf(uneven)).toEqual({
+      share: 0.8,
+      longest_blind_mm: 10,
+      blind_from_mm: 0,
+      blind_to_mm: 10,
+    });
+  });
+
   it("names the first of two stretches as long", () => {
     expect(coverageOf(seam("x.x.x"))).toMatchObject({ blind_from_mm: 0, blind_to_mm: 20 });
   });

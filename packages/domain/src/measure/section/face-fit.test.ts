@@ -52,6 +52,18 @@ describe("a face among other points", () => {
     expect(Math.abs(fit.angle_rad)).toBeLessThan(0.0025);
   });
 
+  it("is found among four strays in ten in every section, not only in most", () => {
+    for (let seed = 1; seed <= 60; seed++) {
+      const draw = drawsFrom(1000 + seed);
+      const strewn = uprightPoints(1.5, 5, seed).map(
+        ([l, n], i): SectionPoint => (i % 5 < 2 ? [4 * draw() - 2, n] : [l, n]),
+      );
+      const fit = fitFace(sliceFrom(strewn), upright, { ...SEARCH, seed });
+      if (!fit) throw new Error(`no face, seed ${seed}`);
+      expect(Math.abs(distanceFrom(fit, 6, 1.5 + 6 * Math.tan(5 * RAD)))).toBeLessThan(0.03);
+    }
+  });
+
   it("is not moved by a ghost of the other face, mirrored behind it and as straight as itself", () => {
     const normal = normalsFrom(4);
     // A second reflection: 30 points on a line of their own, in front of the foot.
