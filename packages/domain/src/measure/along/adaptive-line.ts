@@ -31,6 +31,9 @@ export interface Estimate {
 type Sums = Float64Array;
 const noSums = (): Sums => new Float64Array(8);
 
+/** Sums that serve again at every place: they are asked for some hundred times at each. */
+const room = { side: noSums(), moved: noSums(), both: noSums() };
+
 function add(sums: Sums, x: number, y: number, u: number): void {
   const w = 1 / (u * u);
   sums[0]! += w;
@@ -45,7 +48,7 @@ function add(sums: Sums, x: number, y: number, u: number): void {
 
 /** The weighted straight line's value at x = 0; a mean where all points lie at one place. */
 function lineAtZero(sums: Sums): Estimate {
-  const [w = 0, x = 0, xx = 0, , , y = 0, xy = 0] = sums;
+  const [w, x, xx, y, xy] = [sums[0]!, sums[1]!, sums[2]!, sums[5]!, sums[6]!];
   const det = w * xx - x * x;
   if (det <= 1e-9 * w * xx) return { value: y / w, u: 1 / Math.sqrt(w) };
   return { value: (xx * y - x * xy) / det, u: Math.sqrt(xx / det) };
@@ -85,15 +88,14 @@ const BREAK = 4;
 /** Whether a slice lies where the line through those before it leads; two are needed to lead anywhere. */
 function follows(sums: Sums, count: number, x: number, y: number, u: number): boolean {
   if (count < 2) return true;
-  const there = shifted(sums, x);
-  const { value, u: u_line } = lineAtZero(there);
-  return Math.abs(y - value) <= BREAK * Math.hypot(u, u_line);
+  const { value, u: u_line } = lineAtZero(shifted(sums, x));
+  return (y - value) ** 2 <= BREAK * BREAK * (u * u + u_line * u_line);
 }
 
 /** The sums about another origin, as far as a line needs them. */
 function shifted(sums: Sums, by: number): Sums {
-  const [w = 0, x = 0, xx = 0, , , y = 0, xy = 0] = sums;
-  const moved = noSums();
+  const [w, x, xx, y, xy] = [sums[0]!, sums[1]!, sums[2]!, sums[5]!, sums[6]!];
+  const { moved } = room;
   moved[0] = w;
   moved[1] = x - by * w;
   moved[2] = xx - 2 * by * x + by * by * w;
@@ -110,7 +112,7 @@ function agreeing(series: Series, side: readonly number[], x_mm: number): number
   let low = Number.NEGATIVE_INFINITY;
   let high = Number.POSITIVE_INFINITY;
   let kept = 1;
-  const sums = noSums();
+  const sums = room.side.fill(0);
   let used = 0;
   for (const width of WIDTHS) {
     while (used < Math.min(width, side.length)) {
@@ -148,7 +150,7 @@ export function adaptiveLine(series: Series, nearest: number, x_mm: number, pitc
   const on = onSide(series, nearest, 1, pitch_mm);
   const before = agreeing(series, back, series.at_mm[nearest]!);
   const after = agreeing(series, on, series.at_mm[nearest]!);
-  const sums = noSums();
+  const sums = room.both.fill(0);
   for (const k of [...back.slice(0, before), ...on.slice(1, after)])
     add(sums, series.at_mm[k]! - x_mm, series.values[k]!, series.u[k]!);
   const isCurved = Math.min(before, after) > CURVED_SIDE;
