@@ -158,16 +158,7 @@ function sorted(points: SectionPoints, groups: Int32Array): Slices {
     rank[group] = i;
     starts[i + 1] = starts[i]! + sizes[group]!;
   });
-  const l_mm = new Float64Array(points.count);
-  const n_mm = new Float64Array(points.count);
-  const next = starts.slice(0, -1);
-  for (let k = 0; k < points.count; k++) {
-    const slice = rank[groups[k]!]!;
-    const to = next[slice]!;
-    next[slice] = to + 1;
-    l_mm[to] = points.l_mm[k]!;
-    n_mm[to] = points.n_mm[k]!;
-  }
+  const { l_mm, n_mm } = inOrder(groups) ? points : reordered(points, groups, { rank, starts });
   const at_mm = Float64Array.from(present, (group) => means_mm[group]!);
   const steps = at_mm.slice(1).map((at, i) => at - at_mm[i]!);
   return {
@@ -178,4 +169,29 @@ function sorted(points: SectionPoints, groups: Int32Array): Slices {
     n_mm,
     pitch_mm: steps.length > 0 ? medianOf(steps) : 0,
   };
+}
+
+/** Whether the points stand slice by slice already, as a scanner sends them. */
+function inOrder(groups: Int32Array): boolean {
+  for (let k = 1; k < groups.length; k++) if (groups[k]! < groups[k - 1]!) return false;
+  return true;
+}
+
+/** The points slice by slice, within a slice in the order of the scan. */
+function reordered(
+  points: SectionPoints,
+  groups: Int32Array,
+  { rank, starts }: { readonly rank: Int32Array; readonly starts: Int32Array },
+): { readonly l_mm: Float64Array; readonly n_mm: Float64Array } {
+  const l_mm = new Float64Array(points.count);
+  const n_mm = new Float64Array(points.count);
+  const next = starts.slice(0, -1);
+  for (let k = 0; k < points.count; k++) {
+    const slice = rank[groups[k]!]!;
+    const to = next[slice]!;
+    next[slice] = to + 1;
+    l_mm[to] = points.l_mm[k]!;
+    n_mm[to] = points.n_mm[k]!;
+  }
+  return { l_mm, n_mm };
 }
