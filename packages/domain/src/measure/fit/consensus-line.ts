@@ -25,19 +25,42 @@ export function drawsFrom(seed: number): () => number {
   };
 }
 
-/** How well a line through two points explains the rest: truncated squared distances, so that near beats far. */
-function support(ts: Float64Array, ds: Float64Array, count: number, line: Line, band_mm: number): number {
+/** Points scored between two looks at whether a line can still win. */
+const BLOCK = 16;
+
+/** A hair, so that rounding never gives up a line that would just have won. */
+const HAIR = 1e-9;
+
+/**
+ * How well a line through two points explains the rest: truncated squared distances, so that near beats far.
+ * @param least what it must do better than: a line that cannot any more is given up
+ * @returns 0 to 1; 0 for a line given up
+ */
+function support({ ts, ds, count }: Drawn, line: Line, band_mm: number, least: number): number {
   const every = Math.max(1, Math.floor(count / SCORED_POINTS));
+  const { t_mm, d_mm } = line;
   const cos = Math.cos(line.angle_rad);
   const sin = Math.sin(line.angle_rad);
   const by = 1 / (band_mm * band_mm);
+  const needed = (least * count) / every - HAIR;
   let score = 0;
-  for (let i = 0; i < count; i += every) {
-    const r = (ds[i]! - line.d_mm) * cos - (ts[i]! - line.t_mm) * sin;
-    const rest = 1 - r * r * by;
-    if (rest > 0) score += rest;
+  for (let from = 0; from < count; from += BLOCK * every) {
+    // Every point still to come counts one at most.
+    if (score + (count - from) / every + 1 < needed) return 0;
+    const to = Math.min(count, from + BLOCK * every);
+    for (let i = from; i < to; i += every) {
+      const r = (ds[i]! - d_mm) * cos - (ts[i]! - t_mm) * sin;
+      const rest = 1 - r * r * by;
+      if (rest > 0) score += rest;
+    }
   }
   return (score * every) / count;
+}
+
+interface Drawn {
+  readonly ts: Float64Array;
+  readonly ds: Float64Array;
+  readonly count: number;
 }
 
 /**
@@ -53,6 +76,7 @@ export function consensusLine(
   search: LineSearch,
 ): { readonly line: Line; readonly share: number } | null {
   if (count < 3) return null;
+  const points = { ts, ds, count };
   const draw = drawsFrom(search.seed);
   const steepest = Math.tan(search.turn_rad);
   let best: Line | null = null;
@@ -65,7 +89,7 @@ export function consensusLine(
     // Two neighbours give no direction: noise of the band's size would turn the line out of its window.
     if (Math.abs(run) < 4 * search.band_mm || Math.abs(rise) > steepest * Math.abs(run)) continue;
     const line = { t_mm: ts[i]!, d_mm: ds[i]!, angle_rad: Math.atan(rise / run) };
-    const score = support(ts, ds, count, line, search.band_mm);
+    const score = support(points, line, search.band_mm, share);
     if (score <= share) continue;
     share = score;
     best = line;
