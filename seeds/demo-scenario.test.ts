@@ -182,10 +182,13 @@ describe("the demo scenario as a stream", () => {
     expect(new Set(digests).size).toBe(digests.length);
   });
 
-  test("keeps its scans small: 150 kB each, 60 MB in all", () => {
-    const sizes = ofKind("scan").map(({ file }) => file.bytes.length);
-    expect(Math.max(...sizes)).toBeLessThan(150_000);
-    expect(sizes.reduce((sum, size) => sum + size, 0)).toBeLessThan(60e6);
+  test("keeps its scans small: 150 kB each, 350 kB of a finished weld, 60 MB in all", () => {
+    const sizes = (stage: "fitup" | "bead") =>
+      ofKind("scan").flatMap(({ fields, file }) => (fields.stage === stage ? file.bytes.length : []));
+    expect(Math.max(...sizes("fitup"))).toBeLessThan(150_000);
+    expect(Math.max(...sizes("bead"))).toBeLessThan(350_000);
+    const all = [...sizes("fitup"), ...sizes("bead")];
+    expect(all.reduce((sum, size) => sum + size, 0)).toBeLessThan(60e6);
   });
 });
 

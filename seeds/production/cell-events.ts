@@ -10,7 +10,8 @@ import { commonFit, type Fit, fitUpFor, partPose } from "./fit-ups.ts";
 import { type Operator, operatorsOf } from "./operators.ts";
 import { type Misfit, PARTS } from "./part-plan.ts";
 import type { TimedTask } from "./schedule.ts";
-import type { CellTask, MountTask, PassTask, ScanTask } from "./tasks.ts";
+import type { BeadTask, CellTask, MountTask, PassTask, ScanTask } from "./tasks.ts";
+import { weldFor } from "./welds.ts";
 
 /** What every event of a cell needs to know. */
 interface Floor {
@@ -45,6 +46,8 @@ function taskEvents(task: CellTask, floor: Floor): PlannedEvent[] {
       return [scanEvent(task, floor)];
     case "pass":
       return passEvents(task, floor);
+    case "bead":
+      return [beadEvent(task, floor)];
     case "mount":
       return mountEvents(task, floor);
   }
@@ -90,6 +93,32 @@ function scanEvent(task: ScanTask, { seed, calendar, cell, hour }: Floor): Plann
       cell,
       fields: { stage: "fitup", units: "mm", taken_at: instantOf(taken_ms) },
       file: { name, bytes: scanSeam({ seam, fitUp, pose }, random) },
+    };
+  };
+  return { at_ms, make };
+}
+
+/** The finished weld on the joint as it stood for its last scan. */
+function beadEvent({ part, seam }: BeadTask, { seed, calendar, cell, hour }: Floor): PlannedEvent {
+  const taken_ms = calendar.at(hour);
+  const at_ms = taken_ms + SCAN_SENT_S * 1000;
+  const on: SeamRef = { part: part.ref, number: seam.number };
+  const make = (): DemoEvent => {
+    const random = scanRandom(seed, on, part.refitted[seam.number] !== undefined);
+    const fitUp = fitUpFor(seam, fitOf(null, random), random);
+    const weld = weldFor(part.ref, seam, new Random(seed, `weld ${part.ref} ${seam.number}`));
+    const pose = partPose(new Random(seed, `pose ${part.ref}`));
+    return {
+      kind: "scan",
+      at: instantOf(at_ms),
+      by: keyNameOf(cell),
+      seam: on,
+      cell,
+      fields: { stage: "bead", units: "mm", taken_at: instantOf(taken_ms) },
+      file: {
+        name: `${part.serial}-${seam.number}-bead.ply`,
+        bytes: scanSeam({ seam, fitUp: { ...fitUp, tacks: [], blind: [] }, pose, weld }, random),
+      },
     };
   };
   return { at_ms, make };

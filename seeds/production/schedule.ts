@@ -17,7 +17,13 @@ const FIRST_HOUR = 1.2;
 const LAST_TASK_BEFORE_END_HOURS = 0.12;
 
 /** How long tasks take, as shares of one pass with its preparation. */
-const EFFORT: Readonly<Record<CellTask["kind"], number>> = { "set-up": 2, scan: 0.4, mount: 0.3, pass: 1 };
+const EFFORT: Readonly<Record<CellTask["kind"], number>> = {
+  "set-up": 2,
+  scan: 0.4,
+  mount: 0.3,
+  pass: 1,
+  bead: 0.3,
+};
 
 function timedTasks(cell: Ref, parts: readonly PartPlan[], random: Random): TimedTask[] {
   const tasks = cellTasks(cell, parts);

@@ -17,6 +17,11 @@ export interface ScanTask extends OnSeam {
   readonly misfit: Misfit | null;
 }
 
+/** The scan of a finished seam. */
+export interface BeadTask extends OnSeam {
+  readonly kind: "bead";
+}
+
 export interface PassTask extends OnSeam {
   readonly kind: "pass";
   readonly pass_number: number;
@@ -40,7 +45,7 @@ export interface SetUpTask {
 }
 
 /** What a cell does, one thing after another. */
-export type CellTask = ScanTask | PassTask | MountTask | SetUpTask;
+export type CellTask = ScanTask | PassTask | BeadTask | MountTask | SetUpTask;
 
 /** What is mounted on a cell as its tasks go on; the planning functions write it. */
 interface Mounted {
@@ -144,7 +149,15 @@ function seamPasses(
       next_wire: changes && i === 0 ? NEXT_WIRE : null,
     }),
   );
-  return [...mounts, ...passes];
+  const bead: BeadTask[] = isBeadScanned(part, seam) ? [{ kind: "bead", part, seam }] : [];
+  return [...mounts, ...passes, ...bead];
+}
+
+/** Of every fourth part some finished fillets are scanned, and every fillet that an inspection was to reject. */
+function isBeadScanned(part: PartPlan, { joint, number }: SeamDesign): boolean {
+  if (joint !== "fillet_t") return false;
+  const isSampled = part.place % 4 === 1 && Number(number.slice(1)) <= 6;
+  return isSampled || part.rejected[number] !== undefined;
 }
 
 /** Lots of which the last has been used when they come off; flux-cored and metal-cored wire go on and off by turns. */

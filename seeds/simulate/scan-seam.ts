@@ -6,7 +6,8 @@ import { type FitUp, type JointState, jointAt } from "./fit-up.ts";
 import { cloudPly } from "./ply.ts";
 import { type Returns, roomFor, type SpatterCut, takeProfile } from "./profile.ts";
 import { sectionFaces } from "./section.ts";
-import { SENSORS } from "./sensor.ts";
+import { FINISHED_SENSOR, SENSORS } from "./sensor.ts";
+import { type FilletWeld, finishedFaces } from "./weld-face.ts";
 
 /** The scan runs on past each end by this, so that ends can be seen. */
 const RUN_ON_MM = 5;
@@ -24,6 +25,8 @@ export interface SeamOnPart {
   readonly seam: SeamDesign;
   readonly fitUp: FitUp;
   readonly pose: PartPose;
+  /** Once it is welded; a T joint's only. */
+  readonly weld?: FilletWeld;
 }
 
 const dot = (one: Vector, other: Vector): number => one[0] * other[0] + one[1] * other[1] + one[2] * other[2];
@@ -93,9 +96,9 @@ function intoPartFrame(returns: Returns, frame: Frame, xyz_mm: Float32Array, cou
  * @returns a binary PLY in the part frame
  */
 export function scanSeam(onPart: SeamOnPart, random: Random): Uint8Array {
-  const { seam, fitUp, pose } = onPart;
+  const { seam, fitUp, pose, weld } = onPart;
   const { length_mm, frameAt } = seam.line;
-  const sensor = SENSORS[seam.joint];
+  const sensor = weld ? FINISHED_SENSOR : SENSORS[seam.joint];
   const stations_mm = [-RUN_ON_MM, ...stationsOf(length_mm), length_mm + RUN_ON_MM];
   const balls = strewn(onPart, random);
   const returns = roomFor(sensor);
@@ -107,7 +110,7 @@ export function scanSeam(onPart: SeamOnPart, random: Random): Uint8Array {
     const joint = displaced(jointAt(fitUp, station_mm, length_mm), frame, pose);
     if (joint.blind) continue;
     const withPlateB = !seam.ends_free || (nominal_mm >= 0 && nominal_mm <= length_mm);
-    const faces = sectionFaces(seam, joint, withPlateB);
+    const faces = weld ? finishedFaces(seam, joint, weld, station_mm) : sectionFaces(seam, joint, withPlateB);
     const spatter = cutBalls(balls, station_mm, surfaceHeight(seam) + joint.normal_mm);
     takeProfile(faces, spatter, { sensor, random }, returns);
     count = intoPartFrame(returns, frame, xyz_mm, count);

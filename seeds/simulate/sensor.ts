@@ -26,3 +26,6 @@ export const SENSORS: Readonly<Record<ShopJoint, Sensor>> = {
   butt_v: set(110, 32, 0),
   corner_open: set(104, 30, -45),
 };
+
+/** A finished weld is looked at wider and finer: its toes and the plates beside them have to be seen. */
+export const FINISHED_SENSOR: Sensor = set(320, 44, 40);

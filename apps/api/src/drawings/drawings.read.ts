@@ -1,3 +1,4 @@
+import { ISO_5817_CURRENT, type QualityLevel } from "@beadroll/domain/quality/iso-5817/limit";
 import type { Drawing, DrawingPage, ModelSeam } from "@beadroll/domain/schemas/drawing";
 import { resolveLimits, type SeamModel } from "@beadroll/domain/schemas/seam-model";
 import type { Knex } from "knex";
@@ -85,9 +86,13 @@ export async function readModelSeam(db: Knex, id: string): Promise<ModelSeam> {
 
 /** The model of a model seam with the limits in force. @throws Refusal not-found */
 export async function readSeamModel(db: Knex, id: string): Promise<SeamModel> {
-  const row: { model: string; limits: string } | undefined = await db("model_seams")
+  const row:
+    | { model: string; limits: string; weld_size_mm: number; quality_level: QualityLevel }
+    | undefined = await db("model_seams")
     .where({ id })
-    .first("model", "limits");
+    .first("model", "limits", "weld_size_mm", "quality_level");
   if (row === undefined) throw refusal("not-found", "No model seam here has that id.");
-  return { ...JSON.parse(row.model), limits: JSON.parse(row.limits) };
+  const { weld_size_mm, quality_level } = row;
+  const weld = { weld_size_mm, quality_level, edition: ISO_5817_CURRENT };
+  return { ...JSON.parse(row.model), limits: JSON.parse(row.limits), weld };
 }

@@ -1,7 +1,9 @@
 import type { Outcome } from "@beadroll/domain/faults/fault";
 import type { LengthUnit } from "@beadroll/domain/measure/scan-cloud";
+import type { BeadResult } from "@beadroll/domain/schemas/bead-result";
 import type { PassResult } from "@beadroll/domain/schemas/pass-result";
 import type { ProcedureRanges } from "@beadroll/domain/schemas/procedure";
+import type { ScanRecord } from "@beadroll/domain/schemas/scan";
 import type { ScanResult } from "@beadroll/domain/schemas/scan-result";
 import type { SeamModel } from "@beadroll/domain/schemas/seam-model";
 import type { SectionView } from "@beadroll/domain/schemas/section-view";
@@ -17,12 +19,14 @@ export interface ScanFiles {
 export type MeasureTask =
   | {
       readonly kind: "evaluate";
+      readonly stage: ScanRecord["stage"];
       readonly files: ScanFiles;
       readonly model: SeamModel;
       readonly scanner_accuracy_mm: number | null;
     }
   | {
       readonly kind: "section";
+      readonly stage: ScanRecord["stage"];
       readonly files: ScanFiles;
       readonly model: SeamModel;
       readonly station_mm: number;
@@ -37,7 +41,7 @@ export type MeasureTask =
 
 /** What a task gives. */
 export type MeasureAnswer<T extends MeasureTask> = T["kind"] extends "evaluate"
-  ? Outcome<ScanResult>
+  ? Outcome<ScanResult | BeadResult>
   : T["kind"] extends "section"
     ? Outcome<SectionView>
     : Outcome<PassResult>;

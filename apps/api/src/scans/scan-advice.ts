@@ -6,11 +6,11 @@ import { fillAdvice } from "@beadroll/domain/weld/deposit/fill-advice";
 import type { Knex } from "knex";
 import { readSeamModel } from "../drawings/drawings.read.ts";
 import { accepted, refusal } from "../http/refusal.ts";
-import { readScanPage, readScanSource } from "./scans.read.ts";
+import { readFitUpPage, readScanSource } from "./scans.read.ts";
 
-/** The corrected path of a stored scan. @throws Refusal not-found */
+/** The corrected path of a stored scan. @throws Refusal not-found, scan-not-fitup */
 export async function readCorrectedPath(db: Knex, scanId: string): Promise<CorrectedPath> {
-  const { result } = await readScanPage(db, scanId);
+  const { result } = await readFitUpPage(db, scanId);
   const { model_seam_id } = await readScanSource(db, scanId);
   return correctedPath(await readSeamModel(db, model_seam_id), result);
 }
@@ -24,7 +24,7 @@ interface Welded {
 
 /** The fill that a stored scan asks for, under its model seam's procedure. @throws Refusal not-found, procedure-incomplete */
 export async function readFillAdvice(db: Knex, scanId: string): Promise<FillAdvice> {
-  const { result } = await readScanPage(db, scanId);
+  const { result } = await readFitUpPage(db, scanId);
   const { model_seam_id } = await readScanSource(db, scanId);
   const welded: Welded | undefined = await db("model_seams")
     .leftJoin("procedures", "procedures.id", "model_seams.procedure_id")

@@ -1,6 +1,7 @@
 import { decodeStations } from "@beadroll/domain/measure/station-codec";
-import type { ScanPage, ScanRecord } from "@beadroll/domain/schemas/scan";
-import type { ScanResult } from "@beadroll/domain/schemas/scan-result";
+import { type BeadResult, BeadStation } from "@beadroll/domain/schemas/bead-result";
+import type { FitUpScanPage, ScanPage, ScanRecord } from "@beadroll/domain/schemas/scan";
+import { type ScanResult, StationResult } from "@beadroll/domain/schemas/scan-result";
 import type { Knex } from "knex";
 import { refusal } from "../http/refusal.ts";
 
@@ -30,7 +31,9 @@ const query = (db: Knex): Knex.QueryBuilder =>
     .select(COLUMNS);
 
 /** What the summary column keeps: the result without its stations. */
-export type KeptSummary = Omit<ScanResult, "stations">;
+type KeptSummary = Omit<ScanResult, "stations"> | Omit<BeadResult, "stations">;
+
+const isBead = (kept: KeptSummary): kept is Omit<BeadResult, "stations"> => "stage" in kept;
 
 /** Scans of a seam, latest first, without their stations. */
 export async function readScansOfSeam(db: Knex, seamId: string): Promise<ScanRecord[]> {
@@ -45,11 +48,25 @@ export async function readScanPage(db: Knex, id: string): Promise<ScanPage> {
   if (row === undefined) throw refusal("not-found", "No scan here has that id.");
   const { summary, stations, ...record } = row;
   const kept: KeptSummary = JSON.parse(summary);
-  return { ...record, result: { ...kept, stations: decodeStations(stations) } };
+  return isBead(kept)
+    ? { ...record, stage: "bead", result: { ...kept, stations: decodeStations(stations, BeadStation) } }
+    : { ...record, stage: "fitup", result: { ...kept, stations: decodeStations(stations, StationResult) } };
+}
+
+/** A scan of the fit-up with everything measured. @throws Refusal not-found, scan-not-fitup */
+export async function readFitUpPage(db: Knex, id: string): Promise<FitUpScanPage> {
+  const page = await readScanPage(db, id);
+  if (page.stage === "bead")
+    throw refusal(
+      "scan-not-fitup",
+      "This scan is of the finished bead; the fit-up's scan has the path and the fill.",
+    );
+  return page;
 }
 
 /** What measuring a stored scan again needs. */
 export interface ScanSource {
+  readonly stage: ScanRecord["stage"];
   readonly model_seam_id: string;
   readonly limits: string;
   readonly file_name: string;
@@ -65,6 +82,7 @@ export async function readScanSource(db: Knex, id: string): Promise<ScanSource> 
     .where({ "scans.id": id })
     .first(
       "seams.model_seam_id",
+      "scans.stage",
       "scans.limits",
       "scans.file_name",
       "scans.file_digest",

@@ -1,5 +1,6 @@
 import { encodeStations } from "@beadroll/domain/measure/station-codec";
 import { encodeStrip, stripOf } from "@beadroll/domain/measure/strip";
+import type { BeadResult } from "@beadroll/domain/schemas/bead-result";
 import type { ScanCreate, ScanPage } from "@beadroll/domain/schemas/scan";
 import type { ScanResult } from "@beadroll/domain/schemas/scan-result";
 import { resolveLimits, type SeamModel } from "@beadroll/domain/schemas/seam-model";
@@ -26,7 +27,7 @@ export interface PushedScan {
 }
 
 interface Measured {
-  readonly result: ScanResult;
+  readonly result: ScanResult | BeadResult;
   readonly model: SeamModel;
   readonly cell_id: string | null;
 }
@@ -59,6 +60,7 @@ export async function evaluationOf(
   const cell_id = await cellOf(reader, caller, pushed.fields.cell_tag);
   const task: EvaluateTask = {
     kind: "evaluate",
+    stage: pushed.fields.stage,
     files: filesOf(deps, pushed),
     model: await readSeamModel(reader, seam.model_seam_id),
     scanner_accuracy_mm: await scannerAccuracy(deps, cell_id),
@@ -72,8 +74,9 @@ async function measure(deps: Deps, context: ChangeContext, pushed: PushedScan): 
   return { result: accepted(await deps.measure.run(task)), model: task.model, cell_id };
 }
 
-/** What lists show of a seam's latest fit-up scan. */
+/** What lists show of a seam's latest fit-up scan; a scan of the bead changes nothing there. */
 function listColumns({ result, model }: Measured): Row {
+  if ("stage" in result) return {};
   const { stations } = result;
   const limits = resolveLimits(model.limits).adapt;
   const scale = { section: model.section, limits, length_mm: model.seam.length_mm };
@@ -152,11 +155,7 @@ export async function recordScan(deps: Deps, context: ChangeContext, pushed: Pus
       await recordFile(trx, context.caller, pushed.scan);
       if (pushed.poses) await recordFile(trx, context.caller, pushed.poses);
       await trx.insert("scans", { id, seam_id: now.id, attempt, ...scanRow(trx, context, pushed, measured) });
-      await deriveSeam(
-        trx,
-        { id: now.id, attempt },
-        pushed.fields.stage === "fitup" ? listColumns(measured) : {},
-      );
+      await deriveSeam(trx, { id: now.id, attempt }, listColumns(measured));
     }
     const { verdict } = measured.result;
     return {
@@ -175,6 +174,7 @@ export async function readSection(deps: Deps, scanId: string, station_mm: number
   const model = await readSeamModel(reader, source.model_seam_id);
   const outcome = await deps.measure.run({
     kind: "section",
+    stage: source.stage,
     model: { ...model, limits: JSON.parse(source.limits) },
     station_mm,
     files: {

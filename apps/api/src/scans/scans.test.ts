@@ -1,6 +1,6 @@
 import type { PartPage } from "@beadroll/domain/schemas/part";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
-import { aCell, aPart, aScan } from "../testing/builders.ts";
+import { aBeadScan, aCell, aPart, aScan } from "../testing/builders.ts";
 import { startTestServer, type TestServer } from "../testing/test-server.ts";
 
 let server: TestServer;
@@ -48,6 +48,37 @@ const rows = async () => ({
   scans: (await server.deps.db.reader("scans")).length,
   files: (await server.deps.db.reader("files")).length,
   entries: (await server.deps.db.reader("ledger_entries")).length,
+});
+
+describe("a scan of the finished bead", () => {
+  const pushBead = (undercut_mm: number) =>
+    push(seamTag(7), { scan: aBeadScan(undercut_mm), name: "bead.xyz", fields: { stage: "bead" } });
+
+  it("is measured and judged by the seam's size and level, and leaves the fit-up's verdict alone", async () => {
+    const pushed = await pushBead(0.9);
+    expect(pushed.status).toBe(201);
+    expect(pushed.body).toMatchObject({ stage: "bead", verdict: "hold" });
+    const { result } = pushed.body;
+    expect(result.requirement).toMatchObject({ edition: "2023" });
+    expect(result.findings[0]).toMatchObject({ code: "5011", plate: "b", state: "not_met" });
+    const again = await server.http.get(`/api/v1/scans/${pushed.body.id}`).set("Authorization", reader);
+    expect(again.body).toEqual(pushed.body);
+    const seam = await server.http.get(`/api/v1/seams/${seamTag(7)}`).set("Authorization", reader);
+    expect(seam.body).toMatchObject({ verdict: null, state: "planned" });
+  });
+
+  it("shows its section with the toes, and has neither path nor fill", async () => {
+    const pushed = await pushBead(0);
+    const get = (what: string) =>
+      server.http.get(`/api/v1/scans/${pushed.body.id}/${what}`).set("Authorization", reader);
+    const section = await get("section?station_mm=20");
+    expect(section.body).toMatchObject({ measured: true, root: expect.any(Array) });
+    expect(section.body.toes).toHaveLength(2);
+    for (const what of ["path", "path.csv", "fill"]) {
+      const refused = await get(what);
+      expect([refused.status, refused.body.type]).toEqual([409, expect.stringMatching(/scan-not-fitup$/)]);
+    }
+  });
 });
 
 describe("advice from a scan", () => {

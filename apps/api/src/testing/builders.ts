@@ -58,6 +58,22 @@ export function aScan(lateral_mm = 0, length_mm = 40): Buffer {
   return Buffer.from(`${lines.join("\n")}\n`);
 }
 
+/** A clean scan of the same joint once welded: a flat fillet with legs of 7.2 mm, with an undercut if asked for. */
+export function aBeadScan(undercut_mm = 0, length_mm = 40): Buffer {
+  const leg_mm = 7.2;
+  const lines: string[] = ["x_mm,y_mm,z_mm"];
+  for (let x = 0; x <= length_mm; x += 1) {
+    const put = (y: number, z: number) => lines.push(`${x},${(100 + y).toFixed(4)},${z.toFixed(4)}`);
+    for (let d = leg_mm; d <= 19; d += 0.1) {
+      const dip = d < leg_mm + 1.6 ? (undercut_mm * (1 - Math.cos((Math.PI * (d - leg_mm)) / 0.8))) / 2 : 0;
+      put(-d, 0);
+      put(dip, d);
+    }
+    for (let share = 0; share <= 1; share += 0.01) put(-leg_mm * (1 - share), leg_mm * share);
+  }
+  return Buffer.from(`${lines.join("\n")}\n`);
+}
+
 /** A log of one steady pass. */
 export function aLog(arc_s = 6, current_a = 250): Buffer {
   const lines = ["time_s,current_a,voltage_v,wire_feed_m_min,travel_mm_s,gas_l_min"];

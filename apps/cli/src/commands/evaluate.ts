@@ -4,7 +4,11 @@ import { evaluateScan } from "@beadroll/domain/measure/evaluate";
 import { correctedPath, pathCsv } from "@beadroll/domain/measure/path/corrected-path";
 import type { Registering } from "@beadroll/domain/measure/register/register-scan";
 import type { ScanCloud } from "@beadroll/domain/measure/scan-cloud";
-import type { Iso5817Edition, QualityLevel } from "@beadroll/domain/quality/iso-5817/limit";
+import {
+  ISO_5817_CURRENT,
+  type Iso5817Edition,
+  type QualityLevel,
+} from "@beadroll/domain/quality/iso-5817/limit";
 import type { BeadRequirement } from "@beadroll/domain/schemas/bead-requirement";
 import type { ScanResult } from "@beadroll/domain/schemas/scan-result";
 import type { SeamModel } from "@beadroll/domain/schemas/seam-model";
@@ -53,7 +57,7 @@ async function writePath(file: string, model: SeamModel, result: ScanResult, ste
 function requirementOf(options: EvaluateOptions, model: SeamModel): BeadRequirement {
   const weld_size_mm = options.size ?? model.weld?.weld_size_mm;
   const quality_level = options.level ?? model.weld?.quality_level;
-  const edition = options.edition ?? model.weld?.edition ?? "2023";
+  const edition = options.edition ?? model.weld?.edition ?? ISO_5817_CURRENT;
   if (weld_size_mm === undefined || quality_level === undefined)
     return stop(EXIT.usage, {
       error: "usage",

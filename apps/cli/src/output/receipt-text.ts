@@ -2,9 +2,9 @@ import type { PassRecord } from "@beadroll/domain/schemas/pass";
 import type { ScanPage } from "@beadroll/domain/schemas/scan";
 import { EXIT, type ExitCode } from "../exit-codes.ts";
 import type { Receipt } from "../queue/send-entry.ts";
-import { type Look, styled } from "./look.ts";
+import { type Look, plain, styled } from "./look.ts";
 import { reasonLines } from "./reason-lines.ts";
-import { verdictText } from "./verdict-text.ts";
+import { reasonMark, verdictText } from "./verdict-text.ts";
 
 const recorded = ({ record, is_repeat }: Receipt): string =>
   is_repeat
@@ -14,8 +14,10 @@ const recorded = ({ record, is_repeat }: Receipt): string =>
 function scanText(scan: ScanPage, note: string, look: Look): string {
   const { share } = scan.result.coverage;
   return [
-    `${verdictText(scan.verdict, look)}   scan of seam ${scan.seam_tag}: ${scan.points} points, ${(share * 100).toFixed(1)} % of the stations measured`,
-    ...reasonLines(scan.result.reasons, look),
+    `${verdictText(scan.verdict, look)}   scan of ${scan.stage === "bead" ? "the finished bead of " : ""}seam ${scan.seam_tag}: ${scan.points} points, ${(share * 100).toFixed(1)} % of the stations measured`,
+    ...(scan.stage === "bead"
+      ? scan.result.reasons.map((reason) => `  ${reasonMark("adapt", look)} ${plain(reason)}`)
+      : reasonLines(scan.result.reasons, look)),
     styled(note, look, "faint"),
   ].join("\n");
 }

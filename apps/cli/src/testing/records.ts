@@ -1,3 +1,4 @@
+import type { BeadResult } from "@beadroll/domain/schemas/bead-result";
 import type { PassRecord } from "@beadroll/domain/schemas/pass";
 import type { ScanPage } from "@beadroll/domain/schemas/scan";
 import type { ScanResult, Verdict, VerdictReason } from "@beadroll/domain/schemas/scan-result";
@@ -42,27 +43,49 @@ export function aScanResult(verdict: Verdict = "within"): ScanResult {
   };
 }
 
+/** A result of a finished bead as the measuring code gives it, of one station. */
+export function aBeadResult(verdict: Verdict = "within"): BeadResult {
+  return {
+    engine: "beadroll-measure 0.1.0",
+    stage: "bead",
+    model: "test-t-joint",
+    joint_type: "fillet_t",
+    points: 1200,
+    points_lost: 3,
+    requirement: { weld_size_mm: 5, quality_level: "C", edition: "2023" },
+    verdict,
+    reasons:
+      verdict === "hold" ? ["5011 continuous undercut, plate B: 0.72 mm at 12 mm, 0.50 mm allowed"] : [],
+    findings: [],
+    warnings: [],
+    coverage: { share: 1, longest_blind_mm: 0 },
+    summary: { throat_mm: { mean: 5.1, min: 5.1, max: 5.1 } },
+    stations: [{ station_mm: 0, measured: true, throat_mm: 5.1, u_throat_mm: 0.02 }],
+  };
+}
+
 /** The record of a scan that was pushed. */
 export function aScanRecord(kept: Kept, verdict: Verdict): Mutable<ScanPage> {
-  return {
+  const record = {
     id: ID,
     seam_tag: kept.seam,
     attempt: 1,
-    stage: kept.fields["stage"] === "bead" ? "bead" : "fitup",
     verdict,
     points: 1200,
     file_name: kept.names[0] ?? "",
     file_digest: kept.digests["scan"] ?? "",
     poses_digest: kept.digests["poses"] ?? null,
-    units: "mm",
+    units: "mm" as const,
     engine: "beadroll-measure 0.1.0",
     cell_name: "Cell 2",
     taken_at: kept.fields["taken_at"] ?? kept.at,
     received_at: kept.at,
     received_from: "key Cell 2 PC",
     ledger_seq: 412,
-    result: aScanResult(verdict),
   };
+  return kept.fields["stage"] === "bead"
+    ? { ...record, stage: "bead", result: aBeadResult(verdict) }
+    : { ...record, stage: "fitup", result: aScanResult(verdict) };
 }
 
 /** The record of a pass that was pushed. */

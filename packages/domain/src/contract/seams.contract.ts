@@ -125,7 +125,7 @@ export const getCorrectedPath = contract({
   access: "records:read",
   params: IdParams,
   answer: { status: 200, description: "The path", schema: CorrectedPath },
-  problems: ["not-found"],
+  problems: ["not-found", "scan-not-fitup"],
 });
 
 export const getCorrectedPathCsv = contract({
@@ -137,7 +137,7 @@ export const getCorrectedPathCsv = contract({
   access: "records:read",
   params: IdParams,
   answer: { status: 200, description: "One row a point", media_type: "text/csv" },
-  problems: ["not-found"],
+  problems: ["not-found", "scan-not-fitup"],
 });
 
 export const getFillAdvice = contract({
@@ -151,7 +151,7 @@ export const getFillAdvice = contract({
   access: "records:read",
   params: IdParams,
   answer: { status: 200, description: "The advice", schema: FillAdvice },
-  problems: ["not-found", "procedure-incomplete"],
+  problems: ["not-found", "scan-not-fitup", "procedure-incomplete"],
 });
 
 export const pushPass = contract({

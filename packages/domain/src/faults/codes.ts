@@ -94,6 +94,12 @@ export const FAULT_KINDS = {
     "Give the poses file, or a cloud in the part frame.",
   ),
   "scan-pose-invalid": kind(422, 2, "A pose is not valid", "A pose needs a point and a unit quaternion."),
+  "scan-not-fitup": kind(
+    409,
+    30,
+    "The scan is of the finished bead",
+    "The corrected path and the fill follow from a scan of the fit-up; ask for them with that one.",
+  ),
   "procedure-incomplete": kind(
     409,
     30,

@@ -1,4 +1,4 @@
-import { StationResult } from "../schemas/scan-result.ts";
+import type { z } from "zod";
 
 /**
  * Stations kept compactly: a header in JSON that names the columns, then one float column after the other. At four
@@ -52,9 +52,9 @@ function spread(station: Station, index: number, into: Spread): void {
 
 /**
  * Stations as bytes. Numbers keep four decimals.
- * @param stations any that fit {@link StationResult}
+ * @param stations flat objects of numbers, words, flags and vectors
  */
-export function encodeStations(stations: readonly StationResult[]): Uint8Array {
+export function encodeStations(stations: readonly Station[]): Uint8Array {
   const columns = new Map<string, Float32Array>();
   const others: Header["others"][number][] = [];
   for (const [index, station] of stations.entries())
@@ -87,10 +87,11 @@ function put(station: Record<string, unknown>, name: string, value: number): voi
 }
 
 /**
- * The stations that {@link encodeStations} wrote, checked against their schema.
+ * The stations that {@link encodeStations} wrote.
+ * @param schema what each must fit
  * @throws RangeError when the bytes are of another version or cut
  */
-export function decodeStations(bytes: Uint8Array): StationResult[] {
+export function decodeStations<T>(bytes: Uint8Array, schema: z.ZodType<T>): T[] {
   const view = new DataView(bytes.buffer, bytes.byteOffset, bytes.byteLength);
   const length = view.getUint32(0, true);
   const header: Header = JSON.parse(decodeUtf8(bytes.subarray(4, 4 + length)));
@@ -109,7 +110,7 @@ export function decodeStations(bytes: Uint8Array): StationResult[] {
     const station = stations[index];
     if (station) station[field] = value;
   }
-  return stations.map((station) => StationResult.parse(station));
+  return stations.map((station) => schema.parse(station));
 }
 
 /** The header is ASCII but for what a sentence may hold, so it is written escaped and stays one byte a character. */

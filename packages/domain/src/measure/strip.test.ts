@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import type { StationResult } from "../schemas/scan-result.ts";
+import { StationResult } from "../schemas/scan-result.ts";
 import { DEFAULT_LIMITS } from "../schemas/seam-model.ts";
 import { decodeStations, encodeStations } from "./station-codec.ts";
 import { decodeStrip, encodeStrip, stripOf } from "./strip.ts";
@@ -42,7 +42,7 @@ describe("stored stations", () => {
       at(0, 0.12345678, { u_lateral_mm: 0.0123, root_mm: [1.5, -2.25, 0.1], tack: true, points_a: 120 }),
       { station_mm: 2, measured: false, why: "few_points_b" },
     ];
-    expect(decodeStations(encodeStations(stations))).toEqual([
+    expect(decodeStations(encodeStations(stations), StationResult)).toEqual([
       { ...stations[0], lateral_mm: 0.1235 },
       stations[1],
     ]);
@@ -52,6 +52,6 @@ describe("stored stations", () => {
     const bytes = encodeStations([at(0, 1)]);
     const changed = Uint8Array.from(bytes);
     changed[changed.indexOf("1".charCodeAt(0), 4)] = "7".charCodeAt(0);
-    expect(() => decodeStations(changed)).toThrow(/version/);
+    expect(() => decodeStations(changed, StationResult)).toThrow(/version/);
   });
 });

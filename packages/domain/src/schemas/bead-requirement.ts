@@ -1,5 +1,5 @@
 import { z } from "zod";
-import { ISO_5817_EDITIONS, QUALITY_LEVELS } from "../quality/iso-5817/limit.ts";
+import { ISO_5817_CURRENT, ISO_5817_EDITIONS, QUALITY_LEVELS } from "../quality/iso-5817/limit.ts";
 import { lengthMm } from "./quantities.ts";
 
 /** What a finished weld is judged by. */
@@ -9,7 +9,7 @@ export const BeadRequirement = z
     quality_level: z.enum(QUALITY_LEVELS).meta({ description: "Quality level, ISO 5817", example: "C" }),
     edition: z
       .enum(ISO_5817_EDITIONS)
-      .default("2023")
+      .default(ISO_5817_CURRENT)
       .meta({ description: "Edition of ISO 5817", example: "2023" }),
   })
   .meta({ id: "BeadRequirement" });

@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { BeadResult } from "./bead-result.ts";
 import { digest, id, instant, line } from "./quantities.ts";
 import { ScanResult, Verdict } from "./scan-result.ts";
 
@@ -46,6 +47,20 @@ export const ScanRecord = z
   .meta({ id: "ScanRecord" });
 export type ScanRecord = z.infer<typeof ScanRecord>;
 
-/** A scan with everything measured. */
-export const ScanPage = ScanRecord.extend({ result: ScanResult }).meta({ id: "ScanPage" });
+/** A scan of the fit-up with everything measured. */
+export const FitUpScanPage = ScanRecord.extend({
+  stage: z.literal("fitup").meta({ description: "A scan of the fit-up" }),
+  result: ScanResult,
+}).meta({ id: "FitUpScanPage" });
+export type FitUpScanPage = z.infer<typeof FitUpScanPage>;
+
+/** A scan of the finished weld with everything measured. */
+export const BeadScanPage = ScanRecord.extend({
+  stage: z.literal("bead").meta({ description: "A scan of the finished bead" }),
+  result: BeadResult,
+}).meta({ id: "BeadScanPage" });
+export type BeadScanPage = z.infer<typeof BeadScanPage>;
+
+/** A scan with everything measured, by its stage. */
+export const ScanPage = z.discriminatedUnion("stage", [FitUpScanPage, BeadScanPage]).meta({ id: "ScanPage" });
 export type ScanPage = z.infer<typeof ScanPage>;

@@ -32,6 +32,11 @@ export const SectionView = z
       )
       .meta({ description: "Fitted faces as segments, with the rms of their residuals" }),
     root: point2.nullable().meta({ description: "Root found, (lateral, normal) in mm" }),
+    toes: z
+      .array(point2)
+      .max(2)
+      .optional()
+      .meta({ description: "Finished bead: toes on plate A and plate B, (lateral, normal) in mm" }),
     model: z.array(z.array(point2)).meta({ description: "Outline of the model's section as polylines" }),
   })
   .meta({ id: "SectionView" });

@@ -1,5 +1,7 @@
 import type { LengthUnit } from "@beadroll/domain/measure/scan-cloud";
+import type { BeadResult } from "@beadroll/domain/schemas/bead-result";
 import { LENGTH_UNITS } from "@beadroll/domain/schemas/scan";
+import type { ScanResult } from "@beadroll/domain/schemas/scan-result";
 import type { SeamModel } from "@beadroll/domain/schemas/seam-model";
 import { type ReactElement, useEffect, useState } from "react";
 import { Button } from "../../kit/actions/button.tsx";
@@ -11,14 +13,22 @@ import { Sheet, SheetStack } from "../../kit/page/sheet.tsx";
 import { SectionView } from "../../kit/section/section-view.tsx";
 import { Progress } from "../../kit/states/progress.tsx";
 import { StateMark } from "../../kit/states/state-mark.tsx";
+import { FinishedBead } from "../beads/finished-bead.tsx";
 import { Reasons } from "../seams/scan-reasons.tsx";
 import { SeamDrawings } from "../seams/seam-drawings.tsx";
 import { verdictSentence } from "../seams/seam-words.ts";
+import type { MeasureTask } from "./measure-task.ts";
 import { type Measuring, useMeasuring } from "./use-measuring.ts";
+
+const STAGES = [
+  { value: "fitup", label: "the fit-up" },
+  { value: "bead", label: "the finished bead" },
+] as const;
 
 /** Drops a scan file on a model seam and shows the result, in this browser, without storing it. */
 export function MeasureHere(props: { model: SeamModel; number: string }): ReactElement {
   const [files, setFiles] = useState<readonly File[]>([]);
+  const [stage, setStage] = useState<MeasureTask["stage"]>("fitup");
   const [units, setUnits] = useState<LengthUnit>("mm");
   const [accuracy_mm, setAccuracy] = useState<number | null>(null);
   const measuring = useMeasuring();
@@ -28,6 +38,7 @@ export function MeasureHere(props: { model: SeamModel; number: string }): ReactE
     if (scan === undefined) return;
     measuring.measure({
       model: props.model,
+      stage,
       scan: { name: scan.name, bytes: await scan.arrayBuffer() },
       poses: poses ? { name: poses.name, bytes: await poses.arrayBuffer() } : null,
       units,
@@ -51,7 +62,8 @@ export function MeasureHere(props: { model: SeamModel; number: string }): ReactE
             multiple
             limit="PLY, PCD, XYZ, or profiles with poses.csv"
           />
-          <div className="grid gap-x-8 gap-y-4 sm:grid-cols-2">
+          <div className="grid gap-x-8 gap-y-4 sm:grid-cols-3">
+            <ChoiceField label="Taken of" name="stage" value={stage} onChange={setStage} options={STAGES} />
             <ChoiceField
               label="Written in"
               name="units"
@@ -102,10 +114,16 @@ function Faults(props: { faults: readonly string[] }): ReactElement | null {
   );
 }
 
+/** Where the section is cut before somebody moves the cursor. */
+function worstStation(result: ScanResult | BeadResult): number {
+  if ("stage" in result) return result.findings[0]?.station_mm ?? 0;
+  return result.reasons[0]?.station_mm ?? 0;
+}
+
 function Found(props: { measuring: Measuring; model: SeamModel; number: string }): ReactElement | null {
   const { result, taken_ms, section, cut } = props.measuring;
   const [cursor_mm] = useStationCursor();
-  const first = result?.reasons[0]?.station_mm ?? 0;
+  const first = result === null ? 0 : worstStation(result);
   const station_mm = cursor_mm ?? first;
   // The section is cut in the worker; it is asked when the cursor rests.
   useEffect(() => {
@@ -114,15 +132,18 @@ function Found(props: { measuring: Measuring; model: SeamModel; number: string }
     return () => clearTimeout(timer);
   }, [result, station_mm, cut]);
   if (result === null) return null;
+  const label = `Seam ${props.number}`;
+  const aside = taken_ms === null ? "" : `${result.points} points in ${Math.round(taken_ms)} ms, not stored`;
   return (
     <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-6 xl:grid-cols-[minmax(0,1fr)_26rem]">
-      <Sheet
-        title={<StateMark state={result.verdict} word={verdictSentence(result)} />}
-        aside={taken_ms === null ? "" : `${result.points} points in ${Math.round(taken_ms)} ms, not stored`}
-      >
-        <Reasons result={result} />
-        <SeamDrawings label={`Seam ${props.number}`} result={result} model={props.model} pass={null} />
-      </Sheet>
+      {"stage" in result ? (
+        <FinishedBead label={label} result={result} model={props.model} aside={aside} />
+      ) : (
+        <Sheet title={<StateMark state={result.verdict} word={verdictSentence(result)} />} aside={aside}>
+          <Reasons result={result} />
+          <SeamDrawings label={label} result={result} model={props.model} pass={null} />
+        </Sheet>
+      )}
       {section === null ? null : (
         <Sheet title="Section at the cursor">
           <SectionView section={section} height={300} />

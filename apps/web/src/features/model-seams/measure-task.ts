@@ -1,4 +1,5 @@
 import type { LengthUnit } from "@beadroll/domain/measure/scan-cloud";
+import type { BeadResult } from "@beadroll/domain/schemas/bead-result";
 import type { ScanResult } from "@beadroll/domain/schemas/scan-result";
 import type { SeamModel } from "@beadroll/domain/schemas/seam-model";
 import type { SectionView } from "@beadroll/domain/schemas/section-view";
@@ -6,6 +7,7 @@ import type { SectionView } from "@beadroll/domain/schemas/section-view";
 /** A scan file to be measured in this browser. */
 export interface MeasureTask {
   readonly model: SeamModel;
+  readonly stage: "fitup" | "bead";
   readonly scan: { readonly name: string; readonly bytes: ArrayBuffer };
   readonly poses: { readonly name: string; readonly bytes: ArrayBuffer } | null;
   readonly units: LengthUnit;
@@ -20,6 +22,6 @@ export type MeasureQuestion =
 
 /** What it answers. A scan that cannot be read is told with its faults as sentences. */
 export type MeasureReply =
-  | { readonly kind: "measured"; readonly result: ScanResult; readonly taken_ms: number }
+  | { readonly kind: "measured"; readonly result: ScanResult | BeadResult; readonly taken_ms: number }
   | { readonly kind: "refused"; readonly faults: readonly string[] }
   | { readonly kind: "section"; readonly section: SectionView };

@@ -1,3 +1,4 @@
+import type { BeadResult } from "@beadroll/domain/schemas/bead-result";
 import type { ScanResult } from "@beadroll/domain/schemas/scan-result";
 import type { SectionView } from "@beadroll/domain/schemas/section-view";
 import { useCallback, useEffect, useRef, useState } from "react";
@@ -6,7 +7,7 @@ import type { MeasureQuestion, MeasureReply, MeasureTask } from "./measure-task.
 /** How measuring in this browser stands. */
 export interface Measuring {
   readonly isBusy: boolean;
-  readonly result: ScanResult | null;
+  readonly result: ScanResult | BeadResult | null;
   readonly taken_ms: number | null;
   readonly faults: readonly string[];
   readonly section: SectionView | null;
@@ -16,7 +17,7 @@ export interface Measuring {
 
 interface State {
   readonly isBusy: boolean;
-  readonly result: ScanResult | null;
+  readonly result: ScanResult | BeadResult | null;
   readonly taken_ms: number | null;
   readonly faults: readonly string[];
   readonly section: SectionView | null;

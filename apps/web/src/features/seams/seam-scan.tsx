@@ -1,9 +1,12 @@
+import type { FitUpScanPage } from "@beadroll/domain/schemas/scan";
 import type { SeamPage } from "@beadroll/domain/schemas/seam";
+import type { SeamModel } from "@beadroll/domain/schemas/seam-model";
 import { useSuspenseQuery } from "@tanstack/react-query";
 import type { ReactElement } from "react";
 import { Sheet } from "../../kit/page/sheet.tsx";
 import { EmptyState } from "../../kit/states/empty-state.tsx";
 import { StateMark } from "../../kit/states/state-mark.tsx";
+import { FinishedBead } from "../beads/finished-bead.tsx";
 import { ScanAdvice } from "./scan-advice.tsx";
 import { Reasons } from "./scan-reasons.tsx";
 import { SeamDrawings } from "./seam-drawings.tsx";
@@ -37,20 +40,42 @@ function ShownScan(props: { seam: SeamPage; scanId: string }): ReactElement {
   const { seam } = props;
   const { data: scan } = useSuspenseQuery(seamQueries.scan(props.scanId));
   const { data: model } = useSuspenseQuery(seamQueries.model(seam.model_seam.id));
-  const pass = seam.passes.filter((each) => each.attempt === scan.attempt).at(-1) ?? null;
   const label = `Seam ${seamNumber(seam.number, scan.attempt)}`;
+  // A finished bead lies on the fit-up of its own attempt.
+  const fitUp = seam.scans.find((one) => one.stage === "fitup" && one.attempt === scan.attempt) ?? null;
   return (
     <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-6 xl:grid-cols-[minmax(0,1fr)_26rem]">
-      <Sheet title={<StateMark state={scan.verdict} word={verdictSentence(scan.result)} />}>
-        <Reasons result={scan.result} />
-        <SeamDrawings label={label} result={scan.result} model={model} pass={pass} />
-        {scan.stage === "fitup" ? <ScanAdvice scanId={scan.id} /> : null}
-      </Sheet>
+      {scan.stage === "bead" ? (
+        <FinishedBead label={label} result={scan.result} model={model} />
+      ) : (
+        <FitUp label={label} scan={scan} seam={seam} model={model} />
+      )}
       <div className="xl:sticky xl:top-20">
         <Sheet title="Section at the cursor">
-          <SectionAtCursor scan={scan} model={model} />
+          <SectionAtCursor
+            scan={scan}
+            model={model}
+            fitUpId={scan.stage === "bead" ? (fitUp?.id ?? null) : null}
+          />
         </Sheet>
       </div>
     </div>
+  );
+}
+
+function FitUp(props: {
+  label: string;
+  scan: FitUpScanPage;
+  seam: SeamPage;
+  model: SeamModel;
+}): ReactElement {
+  const { scan, seam, model } = props;
+  const pass = seam.passes.filter((each) => each.attempt === scan.attempt).at(-1) ?? null;
+  return (
+    <Sheet title={<StateMark state={scan.verdict} word={verdictSentence(scan.result)} />}>
+      <Reasons result={scan.result} />
+      <SeamDrawings label={props.label} result={scan.result} model={model} pass={pass} />
+      <ScanAdvice scanId={scan.id} />
+    </Sheet>
   );
 }

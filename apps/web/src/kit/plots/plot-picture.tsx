@@ -102,19 +102,22 @@ function Limits(props: { spec: PlotSpec; scales: PlotScales; layout: PlotLayout 
   );
 }
 
-/** The limits' words right of the plot, each at its upper edge, pushed apart where they would touch. */
+/** The edge of a band that its word stands at. */
+const wordEdge = (band: PlotBand): number => (band.edge === "low" ? band.low : band.high);
+
+/** The limits' words right of the plot, each at its edge, pushed apart where they would touch. */
 function LimitWords(props: {
   spec: PlotSpec;
   bands: readonly PlotBand[];
   scales: PlotScales;
   x: number;
 }): ReactElement {
-  const sorted = [...props.bands].sort((a, b) => b.high - a.high);
+  const sorted = [...props.bands].sort((a, b) => wordEdge(b) - wordEdge(a));
   let last = Number.NEGATIVE_INFINITY;
   return (
     <>
       {sorted.map((band) => {
-        last = Math.max(pixelOf(props.scales.y, band.high) + 4, last + 13);
+        last = Math.max(pixelOf(props.scales.y, wordEdge(band)) + 4, last + 13);
         return (
           <text
             key={`${band.kind} ${band.word}`}
@@ -122,7 +125,7 @@ function LimitWords(props: {
             y={last}
             className={`text-xs ${band.kind === "within" ? "fill-good" : "fill-attend"}`}
           >
-            {`${band.word} ${limitText(props.spec, band.high)}`}
+            {`${band.word} ${limitText(props.spec, wordEdge(band))}`}
           </text>
         );
       })}

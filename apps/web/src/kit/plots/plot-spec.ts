@@ -16,6 +16,8 @@ export interface PlotBand {
   readonly high: number;
   /** The word at its edge, such as "adapt" or "procedure". */
   readonly word: string;
+  /** Which edge bears the word; the upper one where nothing is said. */
+  readonly edge?: "low" | "high";
 }
 
 /** One quantity along the seam, as a plot and as a column of its table. */

@@ -8,6 +8,8 @@ import { type SectionFrame, type SectionPlace, type SectionPoint, sectionFrame }
 
 export interface SectionViewProps {
   section: Section;
+  /** An earlier section at the same station, drawn under it in grey: the fit-up under a finished bead. */
+  under?: Section;
   /** Height in CSS pixels. */
   height?: number;
 }
@@ -40,26 +42,37 @@ export function SectionView(props: SectionViewProps): ReactElement {
             className="kit-drawing"
           >
             <Axes frame={frame} place={place} units={units} />
-            <Drawing section={section} frame={frame} />
+            <Drawing section={section} under={props.under ?? null} frame={frame} />
           </svg>
         )}
       </div>
       <figcaption>
-        <SectionLegend section={section} units={units} />
+        <SectionLegend section={section} under={props.under ?? null} units={units} />
       </figcaption>
     </figure>
   );
 }
 
+/** Of a finished weld this much beside its toes is shown, mm. */
+const BESIDE_TOES_MM = 6;
+
+/** A weld with what lies just beside it: its toes and the root, wider by a little. */
+function weldPoints(toes: readonly SectionPoint[], root: SectionPoint | null): SectionPoint[] {
+  const corners = [...toes, ...(root === null ? [] : [root])];
+  const around = [-BESIDE_TOES_MM, BESIDE_TOES_MM];
+  return corners.flatMap(([l, n]) => around.map((by): SectionPoint => [l + by, n + by]));
+}
+
 /** What must be seen: points used, faces, root, outline. Rejected points may lie far off and do not set the scale. */
 function shownPoints(section: Section): SectionPoint[] {
+  if (section.toes !== undefined) return weldPoints(section.toes, section.root);
   const faces = section.plates.flatMap((plate) => [plate.from, plate.to]);
   const near = [...section.kept, ...faces, ...(section.root === null ? [] : [section.root])];
   return near.length > 0 ? near : [...section.model.flat(), ...section.rejected.map((entry) => entry.point)];
 }
 
-function Drawing(props: { section: Section; frame: SectionFrame }): ReactElement {
-  const { section, frame } = props;
+function Drawing(props: { section: Section; under: Section | null; frame: SectionFrame }): ReactElement {
+  const { section, under, frame } = props;
   const id = `clip-${section.station_mm}`;
   const [left, right] = frame.x.to;
   const [bottom, top] = frame.y.to;
@@ -78,6 +91,9 @@ function Drawing(props: { section: Section; frame: SectionFrame }): ReactElement
             strokeDasharray="6 4"
           />
         ))}
+        {under === null ? null : (
+          <path d={dots(under.kept, frame)} className="fill-edge" data-layer="under" />
+        )}
         <path d={dots(section.kept, frame)} className="fill-link" />
         <path
           d={crosses(
@@ -95,6 +111,9 @@ function Drawing(props: { section: Section; frame: SectionFrame }): ReactElement
           />
         ))}
         {section.root === null ? null : <Root root={section.root} frame={frame} />}
+        {section.toes === undefined ? null : (
+          <path d={toeMarks(section.toes, frame)} className="fill-none stroke-attend" strokeWidth="2" />
+        )}
       </g>
     </>
   );
@@ -151,7 +170,7 @@ function tickText(tick: number, ticks: readonly number[]): string {
   return formatFigure(tick, tickDecimals((ticks[1] ?? 1) - (ticks[0] ?? 0)));
 }
 
-function SectionLegend(props: { section: Section; units: LengthUnits }): ReactElement {
+function SectionLegend(props: { section: Section; under: Section | null; units: LengthUnits }): ReactElement {
   const { section, units } = props;
   const root = section.root;
   return (
@@ -169,14 +188,28 @@ function SectionLegend(props: { section: Section; units: LengthUnits }): ReactEl
       ))}
       <LegendLine drawing={<circle cx="12" cy="7" r="4" className="fill-sheet stroke-ink" strokeWidth="2" />}>
         {root === null
-          ? `Root not found${section.why === null ? "" : `: ${section.why.replaceAll("_", " ")}`}`
+          ? rootWords(section)
           : `Root at ${formatLength(root[0], units)}, ${formatLength(root[1], units)}`}
       </LegendLine>
+      {section.toes === undefined ? null : (
+        <LegendLine drawing={<path d="M12 1v12" className="stroke-attend" strokeWidth="2" />}>
+          Toes of the weld
+        </LegendLine>
+      )}
+      {props.under === null ? null : (
+        <LegendLine drawing={<path d={DOT} className="fill-edge" />}>The fit-up before welding</LegendLine>
+      )}
       <LegendLine drawing={<path d="M2 7h20" className="stroke-ash" strokeDasharray="6 4" />}>
         Model's outline
       </LegendLine>
     </ul>
   );
+}
+
+/** Of flush plates no root shows; else why it was not found. */
+function rootWords({ why, measured }: Section): string {
+  if (measured && why === null) return "No root shows under this weld";
+  return `Root not found${why === null ? "" : `: ${why.replaceAll("_", " ")}`}`;
 }
 
 const DOT = "M10.5 5.5h3v3h-3z";
@@ -216,6 +249,11 @@ function dots(points: readonly SectionPoint[], frame: SectionFrame): string {
 
 function crosses(points: readonly SectionPoint[], frame: SectionFrame): string {
   return points.map((point) => `M${at(point, frame)}m-2.5-2.5l5 5m-5 0l5-5`).join("");
+}
+
+/** A stroke through each toe. */
+function toeMarks(points: readonly SectionPoint[], frame: SectionFrame): string {
+  return points.map((point) => `M${at(point, frame)}m-6-6l12 12m-12 0l12-12`).join("");
 }
 
 function at(point: SectionPoint, frame: SectionFrame): string {

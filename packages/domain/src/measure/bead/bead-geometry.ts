@@ -11,6 +11,8 @@ export type BeadQuantity = (typeof BEAD_QUANTITIES)[number];
 export interface Figure {
   readonly value: number;
   readonly u: number;
+  /** Towards smaller values, where that is surer: what is partly hidden can only be larger than what is seen of it. */
+  readonly u_down?: number;
 }
 
 export type Figures = Partial<Readonly<Record<BeadQuantity, Figure>>>;
@@ -61,12 +63,23 @@ export function overChord(face: readonly FacePoint[], a: FacePoint, b: FacePoint
   return face.map(({ u, v }) => ((v - a.v) * du - (u - a.u) * dv) / size);
 }
 
+/** An angle less sure than this is no measurement, degrees. */
+const LEAST_SURE_DEG = 12;
+
 /** What both kinds of weld say of their toes. A toe at a corner shows neither angle nor undercut. */
 export function anglesAndUndercuts([a, b]: readonly [Toe, Toe]): Figures {
   const angle = ({ angle_deg, u_angle_deg }: Toe) => ({ value: angle_deg, u: u_angle_deg });
-  const undercut = ({ undercut_mm, u_undercut_mm }: Toe) => ({ value: undercut_mm, u: u_undercut_mm });
+  const undercut = ({ undercut_mm, u_undercut_mm, u_undercut_down_mm }: Toe) => ({
+    value: undercut_mm,
+    u: u_undercut_mm,
+    u_down: u_undercut_down_mm,
+  });
+  const isSure = ({ u_angle_deg }: Toe) => u_angle_deg <= LEAST_SURE_DEG;
+  const isSeen = ({ angle_deg }: Toe) => Number.isFinite(angle_deg);
   return {
-    ...(Number.isFinite(a.angle_deg) && { toe_angle_a_deg: angle(a), undercut_a_mm: undercut(a) }),
-    ...(Number.isFinite(b.angle_deg) && { toe_angle_b_deg: angle(b), undercut_b_mm: undercut(b) }),
+    ...(isSure(a) && { toe_angle_a_deg: angle(a) }),
+    ...(isSure(b) && { toe_angle_b_deg: angle(b) }),
+    ...(isSeen(a) && { undercut_a_mm: undercut(a) }),
+    ...(isSeen(b) && { undercut_b_mm: undercut(b) }),
   };
 }

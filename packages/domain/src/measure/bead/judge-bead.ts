@@ -5,6 +5,7 @@ import type { BeadFinding } from "../../schemas/bead-result.ts";
 import { medianOf } from "../fit/median.ts";
 import { COVERAGE_FACTOR } from "../judge/decide.ts";
 import { type BeadCheck, beadChecks } from "./bead-checks.ts";
+import type { Figure } from "./bead-geometry.ts";
 import type { MeasuredBead } from "./measure-bead.ts";
 
 /** Short imperfections: at most this much of any window of this length (ISO 5817:2014, 3.3), mm. */
@@ -12,7 +13,7 @@ const SHORT_MM = 25;
 const WINDOW_MM = 100;
 
 /** Sections nearer together than this are judged by a running median: one alone is a stray return, mm. */
-const STRAY_PITCH_MM = 2;
+const STRAY_PITCH_MM = { mm: 2, deg: 6 } as const;
 
 /** Undercut over a longer unbroken stretch than this is continuous, 5011; else intermittent, 5012, mm. */
 const CONTINUOUS_MM = 25;
@@ -49,11 +50,10 @@ function bound(limit: Limit): { value: number; way: 1 | -1 } | null {
 }
 
 /** The decision rule of ISO 14253-1 for a limit on one side, guard bands of the expanded uncertainty. */
-function decided(over: number, u: number, isNothing: boolean): State {
+function decided(over: number, u: { readonly down: number; readonly up: number }, isNothing: boolean): State {
   if (isNothing) return "met";
-  const expanded = COVERAGE_FACTOR * u;
-  if (over - expanded > ROUNDING) return "not_met";
-  return over + expanded <= ROUNDING ? "met" : "not_proven";
+  if (over - COVERAGE_FACTOR * u.down > ROUNDING) return "not_met";
+  return over + COVERAGE_FACTOR * u.up <= ROUNDING ? "met" : "not_proven";
 }
 
 /** Sections to either side whose median is judged: a toe's angle in one section alone is mostly noise. */
@@ -66,13 +66,14 @@ const KEPT_U = { mm: 1, deg: 0.6 } as const;
 function seriesOf({ outcomes, slices }: MeasuredBead, check: BeadCheck, requirement: BeadRequirement) {
   const figures = outcomes.map((one) => (one.found ? check.measure(one.section.figures, requirement) : null));
   const by = BESIDE[check.unit];
-  return figures.map((figure, i) => {
-    if (!figure || !(slices.pitch_mm <= STRAY_PITCH_MM)) return figure;
+  return figures.map((figure, i): Figure | null => {
+    if (!figure || !(slices.pitch_mm <= STRAY_PITCH_MM[check.unit])) return figure;
     const about = figures.slice(Math.max(0, i - by), i + by + 1).flatMap((one) => one ?? []);
     if (about.length < 3) return figure;
     return {
       value: medianOf(about.map(({ value }) => value)),
       u: KEPT_U[check.unit] * medianOf(about.map(({ u }) => u)),
+      u_down: KEPT_U[check.unit] * medianOf(about.map(({ u, u_down }) => u_down ?? u)),
     };
   });
 }
@@ -101,10 +102,12 @@ function heldSections(
     });
     const limit = bound(sourced.limit);
     if (!limit) return [];
-    const u = check.unit === "mm" ? Math.hypot(figure.u, common_mm) : figure.u;
+    const wholly = (u: number) => (check.unit === "mm" ? Math.hypot(u, common_mm) : u);
+    const u = wholly(figure.u);
+    const down = wholly(figure.u_down ?? figure.u);
     const over = limit.way * (figure.value - limit.value);
-    const state = decided(over, u, check.shows && figure.value === 0);
-    const isThere = figure.value > COVERAGE_FACTOR * u;
+    const state = decided(over, { down, up: u }, check.shows && figure.value === 0);
+    const isThere = figure.value > COVERAGE_FACTOR * down;
     return [{ at_mm: measured.slices.at_mm[i]!, value: figure.value, u, sourced, state, over, isThere }];
   });
 }

@@ -18,6 +18,8 @@ export interface Toe {
   /** Depth of the parent face's lowest place beside the toe, mm; 0 where none shows. */
   readonly undercut_mm: number;
   readonly u_undercut_mm: number;
+  /** Towards a shallower one: a hidden part only makes it deeper. */
+  readonly u_undercut_down_mm: number;
   /** From here on the parent face is as it was, mm along it. */
   readonly clear_mm: number;
 }
@@ -64,24 +66,27 @@ interface Across {
   /** Over the parent face, mm. */
   readonly h: Float64Array;
   readonly count: number;
+  /** Which points of the profile they are. */
+  readonly index: Int32Array;
 }
 
 /**
  * The profile's points as one side sees them, from the middle of the weld outward along the parent face: in these
  * axes the weld's face, an undercut and the parent face lie one after the other.
  */
-function across(profile: BeadProfile, parent: ParentFace, which: 0 | 1, noise_mm: number): Across {
-  const points: { t_mm: number; h_mm: number }[] = [];
+export function across(profile: BeadProfile, parent: ParentFace, which: 0 | 1): Across {
+  const points: { t_mm: number; h_mm: number; i: number }[] = [];
   for (let i = 0; i < profile.count; i++) {
     if (which === 0 ? profile.u_mm[i]! > 0 : profile.u_mm[i]! < 0) continue;
-    points.push(overParent(parent, profile.l_mm[i]!, profile.n_mm[i]!));
+    points.push({ ...overParent(parent, profile.l_mm[i]!, profile.n_mm[i]!), i });
   }
   points.sort((p, q) => p.t_mm - q.t_mm);
   const t = Float64Array.from(points, ({ t_mm }) => t_mm);
   const h = Float64Array.from(points, ({ h_mm }) => h_mm);
-  const follows = followers(t, h, points.length, noise_mm);
+  const follows = followers(t, h, points.length, parent.fit.scale_mm);
   const kept = (_: number, i: number) => follows[i] === 1;
-  return { t: t.filter(kept), h: h.filter(kept), count: follows.reduce((sum, one) => sum + one, 0) };
+  const index = Int32Array.from(points, ({ i }) => i).filter(kept);
+  return { t: t.filter(kept), h: h.filter(kept), count: index.length, index };
 }
 
 /** The first point from the middle outward from which on the points lie on the parent face; -1 where they never do. */
@@ -149,8 +154,9 @@ function undercutOf(
   // A median of three knows 0.67 of what one value does not (normal noise).
   const u = 0.67 * SHARED_ERROR * noise_mm;
   const shows = -lowest > SHOWS * u;
-  const share = isHidden ? HIDDEN_SHARE : ROUNDED_SHARE;
-  return { undercut_mm: shows ? -lowest : 0, u: Math.hypot(u, shows ? -lowest * share : 0) };
+  const depth = shows ? -lowest : 0;
+  const u_down = Math.hypot(u, depth * ROUNDED_SHARE);
+  return { undercut_mm: depth, u: isHidden ? Math.hypot(u, depth * HIDDEN_SHARE) : u_down, u_down };
 }
 
 /**
@@ -160,7 +166,7 @@ function undercutOf(
  */
 export function toeOn(profile: BeadProfile, parent: ParentFace, which: 0 | 1): Toe | null {
   const noise_mm = parent.fit.scale_mm;
-  const points = across(profile, parent, which, noise_mm);
+  const points = across(profile, parent, which);
   const on_mm = Math.max(ON_FACE_MM, ON_FACE_SIGMAS * noise_mm);
   const clear = clearFrom(points, on_mm, parent.end_mm);
   const isCovered = clear < 0 && Number.isFinite(parent.end_mm);
@@ -182,7 +188,11 @@ export function toeOn(profile: BeadProfile, parent: ParentFace, which: 0 | 1): T
   const t_mm = meeting?.t_mm ?? points.t[last]!;
   const u_height = Math.hypot(heightU(parent.fit, t_mm), meeting?.u_mm ?? noise_mm);
   const lean = Math.max(0.15, Math.sin(meeting?.lean_rad ?? 0));
-  const { undercut_mm, u } = undercutOf(points, { toe_mm: t_mm, clear_mm, end_mm: parent.end_mm }, noise_mm);
+  const { undercut_mm, u, u_down } = undercutOf(
+    points,
+    { toe_mm: t_mm, clear_mm, end_mm: parent.end_mm },
+    noise_mm,
+  );
   return {
     t_mm,
     u_t_mm: Math.hypot(u_height / lean, profile.spacing_mm / Math.sqrt(12)),
@@ -191,6 +201,7 @@ export function toeOn(profile: BeadProfile, parent: ParentFace, which: 0 | 1): T
     u_angle_deg: meeting ? Math.hypot(meeting.u_lean_rad * DEG, ROUNDED_DEG) : UNSURE_DEG,
     undercut_mm: over < 0 ? 0 : undercut_mm,
     u_undercut_mm: Math.hypot(u, heightU(parent.fit, t_mm)),
+    u_undercut_down_mm: Math.hypot(u_down, heightU(parent.fit, t_mm)),
     clear_mm,
   };
 }
@@ -208,6 +219,7 @@ function toeAtCorner(points: Across, parent: ParentFace, noise_mm: number): Toe 
     u_angle_deg: Number.NaN,
     undercut_mm: 0,
     u_undercut_mm: Number.NaN,
+    u_undercut_down_mm: Number.NaN,
     clear_mm: parent.end_mm,
   };
 }

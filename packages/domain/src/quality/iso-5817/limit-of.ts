@@ -1,5 +1,5 @@
 import { IMPERFECTIONS, type Imperfection, type WeldSizes } from "./imperfections.ts";
-import type { Iso5817Edition, QualityLevel, SourcedLimit } from "./limit.ts";
+import { ISO_5817_CURRENT, type Iso5817Edition, type QualityLevel, type SourcedLimit } from "./limit.ts";
 
 /** The table begins here, mm (ISO 5817, clause 1). */
 export const THINNEST_MM = 0.5;
@@ -26,7 +26,7 @@ export function imperfection(code: string): Imperfection {
  * @throws RangeError for an unknown number, a size that is missing or not positive, or a plate under 0.5 mm
  */
 export function limitOf(question: LimitQuestion): SourcedLimit {
-  const { code, level, edition = "2023" } = question;
+  const { code, level, edition = ISO_5817_CURRENT } = question;
   const { needs, limit, row, from_memory = false } = imperfection(code);
   const missing = needs.find((size) => question[size] === undefined);
   // A pore is held against the throat or the butt weld's thickness, whichever weld it is in.

@@ -1,5 +1,8 @@
 /** Editions of ISO 5817 that differ in a number; a shop chooses its own. */
 export const ISO_5817_EDITIONS = ["2014", "2023"] as const;
+
+/** The edition that serves where none is chosen. */
+export const ISO_5817_CURRENT = "2023" as const;
 export type Iso5817Edition = (typeof ISO_5817_EDITIONS)[number];
 
 /** Quality levels, the strictest first. */
