@@ -1,4 +1,4 @@
-import type { ScanPage } from "@beadroll/domain/schemas/scan";
+import type { FitUpScanPage } from "@beadroll/domain/schemas/scan";
 import type { Browser } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, inject, it } from "vitest";
 import { launchChromium } from "./chromium.ts";
@@ -14,7 +14,7 @@ interface Seam {
 
 let browser: Browser;
 let seam: Seam;
-let scan: ScanPage;
+let scan: FitUpScanPage;
 
 beforeAll(async () => {
   browser = await launchChromium();

@@ -1,12 +1,15 @@
 // Draws the pictures of docs/measuring.md from the measuring itself:
 //   npx esbuild tests/simulation/draw-measuring.ts --bundle --platform=node --format=esm | node --input-type=module - docs/pictures
 import { writeFileSync } from "node:fs";
+import { beadSectionAt } from "@beadroll/domain/measure/bead/bead-section-at";
+import { measureBead } from "@beadroll/domain/measure/bead/measure-bead";
 import { evaluateScan } from "@beadroll/domain/measure/evaluate";
 import { jointFaces } from "@beadroll/domain/measure/joints/joint-faces";
 import { measureSeam } from "@beadroll/domain/measure/seam/measure-seam";
 import { sectionAt } from "@beadroll/domain/measure/section-at";
 import { JOINT_TYPES, type JointType } from "@beadroll/domain/schemas/seam-model";
 import type { SectionView } from "@beadroll/domain/schemas/section-view";
+import { simulateBead } from "./simulate-bead.ts";
 import { type Simulated, simulate } from "./simulate-scan.ts";
 
 const INK = "#14181C";
@@ -153,7 +156,30 @@ function along(): string {
   );
 }
 
+/** A finished fillet with an undercut, as it was measured. */
+function finished(seed: number): string {
+  const { model, cloud, weld_size_mm, truth } = simulateBead("fillet_t", seed, 0.2, { throat_mm: 5 });
+  const cut = truth.find(({ undercut_a_mm }) => undercut_a_mm > 0.4) ?? truth[10];
+  const view = beadSectionAt(measureBead(model, cloud, weld_size_mm), cut?.station_mm ?? 20);
+  const size = 0.14;
+  const [toeA, toeB] = view.toes ?? [];
+  const toes = [toeA, toeB].flatMap((toe) => (toe ? [cross(toe, BRONZE, 0.7)] : []));
+  const chord = toeA && toeB ? line([toeA, toeB], ASH, size / 2, `${size * 3} ${size * 2}`) : "";
+  const root = view.root ?? [0, 0];
+  const words = [
+    ...(toeA ? [text([toeA[0], toeA[1] - 1.6], "toe on plate A", 0.9, INK, "middle")] : []),
+    ...(toeB ? [text([toeB[0] + 0.9, toeB[1]], "toe on plate B", 0.9)] : []),
+    text([root[0] + 0.9, root[1] - 0.3], "root, constructed", 0.9),
+  ];
+  return drawing(
+    "Section of a finished fillet weld with its parent faces, toes and root",
+    { l: [-16, 10], n: [-4, 15], scale: 26 },
+    sectionBody({ ...view, model: [] }, size) + chord + toes.join("") + words.join(""),
+  );
+}
+
 const folder = process.argv[2] ?? "docs/pictures";
 writeFileSync(`${folder}/joint-types.svg`, definitions());
 writeFileSync(`${folder}/section-under-tack.svg`, dirty("corner_open", 3));
 writeFileSync(`${folder}/along-the-seam.svg`, along());
+writeFileSync(`${folder}/finished-fillet.svg`, finished(3));
