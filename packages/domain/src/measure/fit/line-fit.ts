@@ -49,7 +49,7 @@ export function orthogonalLine(
   ds: Float64Array,
   count: number,
   weights?: Float64Array,
-): (Line & { readonly weight: number; readonly spread_mm2: number }) | null {
+): WeightedLine | null {
   let sum = 0;
   let t_mm = 0;
   let d_mm = 0;
@@ -60,8 +60,24 @@ export function orthogonalLine(
     d_mm += w * ds[i]!;
   }
   if (!(sum > 0)) return null;
-  t_mm /= sum;
-  d_mm /= sum;
+  return throughCentroid({ ts, ds, count }, { t_mm: t_mm / sum, d_mm: d_mm / sum, weight: sum }, weights);
+}
+
+interface Centroid {
+  readonly t_mm: number;
+  readonly d_mm: number;
+  /** Sum of the weights. */
+  readonly weight: number;
+}
+
+type WeightedLine = Line & { readonly weight: number; readonly spread_mm2: number };
+
+/** The line that makes the squared distances least, once the centroid is known. */
+function throughCentroid(
+  { ts, ds, count }: Points,
+  { t_mm, d_mm, weight }: Centroid,
+  weights?: Float64Array,
+): WeightedLine | null {
   let tt = 0;
   let td = 0;
   let dd = 0;
@@ -77,7 +93,7 @@ export function orthogonalLine(
   if (!(tt + dd > 1e-12)) return null;
   const angle_rad = 0.5 * Math.atan2(2 * td, tt - dd);
   const spread_mm2 = (tt + dd) / 2 + Math.hypot((tt - dd) / 2, td);
-  return { t_mm, d_mm, angle_rad, weight: sum, spread_mm2 };
+  return { t_mm, d_mm, angle_rad, weight, spread_mm2 };
 }
 
 const scratch = { size: 0, weights: new Float64Array(0), residuals: new Float64Array(0) };
@@ -114,20 +130,33 @@ interface Points {
   readonly count: number;
 }
 
-/** Tukey weights of the points about a line; returns how many weigh at least a half. */
-function weigh(line: Line, points: Points, scale_mm: number): number {
-  const { weights } = room(points.count);
+/** What weighs in about a line. */
+interface Weighed extends Centroid {
+  /** Points that weigh at least a half. */
+  readonly inliers: number;
+}
+
+/** Tukey weights of the points about a line, and what they add up to. */
+function weigh(line: Line, { ts, ds, count }: Points, scale_mm: number): Weighed {
+  const { weights } = room(count);
   const cos = Math.cos(line.angle_rad);
   const sin = Math.sin(line.angle_rad);
   const by = 1 / (TUKEY * scale_mm);
   let inliers = 0;
-  for (let i = 0; i < points.count; i++) {
-    const u = ((points.ds[i]! - line.d_mm) * cos - (points.ts[i]! - line.t_mm) * sin) * by;
+  let weight = 0;
+  let t_sum = 0;
+  let d_sum = 0;
+  for (let i = 0; i < count; i++) {
+    const u = ((ds[i]! - line.d_mm) * cos - (ts[i]! - line.t_mm) * sin) * by;
     const rest = 1 - u * u;
-    weights[i] = rest > 0 ? rest * rest : 0;
+    const w = rest > 0 ? rest * rest : 0;
+    weights[i] = w;
+    weight += w;
+    t_sum += w * ts[i]!;
+    d_sum += w * ds[i]!;
     if (rest > Math.SQRT1_2) inliers += 1;
   }
-  return inliers;
+  return { inliers, weight, t_mm: t_sum / weight, d_mm: d_sum / weight };
 }
 
 /**
@@ -143,8 +172,9 @@ export function robustLine(points: Points, start: Line, band_mm: number): Fitted
   let inliers = 0;
   for (let round = 0; round < ROUNDS; round++) {
     if (round > 0 && round < 3) scale_mm = scaleAbout(line, points, band_mm);
-    inliers = weigh(line, points, scale_mm);
-    const next = inliers < 3 ? null : orthogonalLine(points.ts, points.ds, points.count, room(0).weights);
+    const weighed = weigh(line, points, scale_mm);
+    inliers = weighed.inliers;
+    const next = inliers < 3 ? null : throughCentroid(points, weighed, room(0).weights);
     if (!next) return null;
     line = next;
   }
@@ -170,21 +200,14 @@ export function offsetLine(
   start: Line,
   known: { readonly band_mm: number; readonly angle_rad: number; readonly u_rad: number },
 ): FittedLine | null {
-  const { weights } = room(points.count);
   let line: Line = { ...start, angle_rad: known.angle_rad };
   let [scale_mm, inliers, weight] = [0, 0, 0];
   for (let round = 0; round < ROUNDS; round++) {
     if (round < 3) scale_mm = scaleAbout(line, points, known.band_mm);
-    inliers = weigh(line, points, scale_mm);
+    const weighed = weigh(line, points, scale_mm);
+    ({ inliers, weight } = weighed);
     if (inliers < 3) return null;
-    let [t_mm, d_mm] = [0, 0];
-    weight = 0;
-    for (let i = 0; i < points.count; i++) {
-      weight += weights[i]!;
-      t_mm += weights[i]! * points.ts[i]!;
-      d_mm += weights[i]! * points.ds[i]!;
-    }
-    line = { t_mm: t_mm / weight, d_mm: d_mm / weight, angle_rad: known.angle_rad };
+    line = { t_mm: weighed.t_mm, d_mm: weighed.d_mm, angle_rad: known.angle_rad };
   }
   return { ...line, scale_mm, inliers, weight, spread_mm2: (scale_mm / Math.max(1e-5, known.u_rad)) ** 2 };
 }
