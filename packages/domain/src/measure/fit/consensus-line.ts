@@ -31,17 +31,22 @@ const BLOCK = 16;
 /** A hair, so that rounding never gives up a line that would just have won. */
 const HAIR = 1e-9;
 
+/** A line through two points as it is scored: `d = offset + slope t`. */
+interface Drawing {
+  readonly slope: number;
+  readonly offset_mm: number;
+}
+
 /**
  * How well a line through two points explains the rest: truncated squared distances, so that near beats far.
  * @param least what it must do better than: a line that cannot any more is given up
  * @returns 0 to 1; 0 for a line given up
  */
-function support({ ts, ds, count }: Drawn, line: Line, band_mm: number, least: number): number {
+function support({ ts, ds, count }: Drawn, line: Drawing, band_mm: number, least: number): number {
   const every = Math.max(1, Math.floor(count / SCORED_POINTS));
-  const { t_mm, d_mm } = line;
-  const cos = Math.cos(line.angle_rad);
-  const sin = Math.sin(line.angle_rad);
-  const by = 1 / (band_mm * band_mm);
+  const { slope, offset_mm } = line;
+  // The distance square to the line is the one along d times the cosine of its direction.
+  const by = 1 / (band_mm * band_mm * (1 + slope * slope));
   const needed = (least * count) / every - HAIR;
   let score = 0;
   for (let from = 0; from < count; from += BLOCK * every) {
@@ -49,8 +54,8 @@ function support({ ts, ds, count }: Drawn, line: Line, band_mm: number, least: n
     if (score + (count - from) / every + 1 < needed) return 0;
     const to = Math.min(count, from + BLOCK * every);
     for (let i = from; i < to; i += every) {
-      const r = (ds[i]! - d_mm) * cos - (ts[i]! - t_mm) * sin;
-      const rest = 1 - r * r * by;
+      const off = ds[i]! - offset_mm - slope * ts[i]!;
+      const rest = 1 - off * off * by;
       if (rest > 0) score += rest;
     }
   }
@@ -79,7 +84,7 @@ export function consensusLine(
   const points = { ts, ds, count };
   const draw = drawsFrom(search.seed);
   const steepest = Math.tan(search.turn_rad);
-  let best: Line | null = null;
+  let best = { at: -1, slope: 0 };
   let share = 0;
   for (let trial = 0; trial < search.trials; trial++) {
     const i = Math.floor(draw() * count);
@@ -88,11 +93,13 @@ export function consensusLine(
     const rise = ds[j]! - ds[i]!;
     // Two neighbours give no direction: noise of the band's size would turn the line out of its window.
     if (Math.abs(run) < 4 * search.band_mm || Math.abs(rise) > steepest * Math.abs(run)) continue;
-    const line = { t_mm: ts[i]!, d_mm: ds[i]!, angle_rad: Math.atan(rise / run) };
+    const slope = rise / run;
+    const line = { slope, offset_mm: ds[i]! - slope * ts[i]! };
     const score = support(points, line, search.band_mm, share);
     if (score <= share) continue;
     share = score;
-    best = line;
+    best = { at: i, slope };
   }
-  return best && { line: best, share };
+  if (best.at < 0) return null;
+  return { line: { t_mm: ts[best.at]!, d_mm: ds[best.at]!, angle_rad: Math.atan(best.slope) }, share };
 }
