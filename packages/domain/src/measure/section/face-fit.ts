@@ -48,19 +48,25 @@ function gather(slice: SectionSlice, face: Face, search: FaceSearch): number {
     room.ts = new Float64Array(2 * size);
     room.ds = new Float64Array(2 * size);
   }
-  const [cos, sin] = [Math.cos(face.direction_rad), Math.sin(face.direction_rad)];
-  const [l0, n0] = face.near;
-  const slope = Math.tan(search.line.angle_rad);
+  const { ts, ds } = room;
+  const { l_mm, n_mm, to } = slice;
+  const { from_mm, to_mm, band_mm, line } = search;
+  const cos = Math.cos(face.direction_rad);
+  const sin = Math.sin(face.direction_rad);
+  const l0 = face.near[0];
+  const n0 = face.near[1];
+  const { t_mm, d_mm } = line;
+  const slope = Math.tan(line.angle_rad);
   let count = 0;
-  for (let i = slice.from; i < slice.to; i++) {
-    const l = slice.l_mm[i]! - l0;
-    const n = slice.n_mm[i]! - n0;
+  for (let i = slice.from; i < to; i++) {
+    const l = l_mm[i]! - l0;
+    const n = n_mm[i]! - n0;
     const t = l * cos + n * sin;
-    if (t < search.from_mm || t > search.to_mm) continue;
+    if (t < from_mm || t > to_mm) continue;
     const d = n * cos - l * sin;
-    if (Math.abs(d - search.line.d_mm - slope * (t - search.line.t_mm)) > search.band_mm) continue;
-    room.ts[count] = t;
-    room.ds[count] = d;
+    if (Math.abs(d - d_mm - slope * (t - t_mm)) > band_mm) continue;
+    ts[count] = t;
+    ds[count] = d;
     count += 1;
   }
   return count;
