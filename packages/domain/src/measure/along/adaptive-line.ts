@@ -48,7 +48,11 @@ function add(sums: Sums, x: number, y: number, u: number): void {
 
 /** The weighted straight line's value at x = 0; a mean where all points lie at one place. */
 function lineAtZero(sums: Sums): Estimate {
-  const [w, x, xx, y, xy] = [sums[0]!, sums[1]!, sums[2]!, sums[5]!, sums[6]!];
+  const w = sums[0]!;
+  const x = sums[1]!;
+  const xx = sums[2]!;
+  const y = sums[5]!;
+  const xy = sums[6]!;
   const det = w * xx - x * x;
   if (det <= 1e-9 * w * xx) return { value: y / w, u: 1 / Math.sqrt(w) };
   return { value: (xx * y - x * xy) / det, u: Math.sqrt(xx / det) };
@@ -94,7 +98,11 @@ function follows(sums: Sums, count: number, x: number, y: number, u: number): bo
 
 /** The sums about another origin, as far as a line needs them. */
 function shifted(sums: Sums, by: number): Sums {
-  const [w, x, xx, y, xy] = [sums[0]!, sums[1]!, sums[2]!, sums[5]!, sums[6]!];
+  const w = sums[0]!;
+  const x = sums[1]!;
+  const xx = sums[2]!;
+  const y = sums[5]!;
+  const xy = sums[6]!;
   const { moved } = room;
   moved[0] = w;
   moved[1] = x - by * w;
@@ -117,7 +125,9 @@ function agreeing(series: Series, side: readonly number[], x_mm: number): number
   for (const width of WIDTHS) {
     while (used < Math.min(width, side.length)) {
       const k = side[used]!;
-      const [x, y, u] = [series.at_mm[k]! - x_mm, series.values[k]!, series.u[k]!];
+      const x = series.at_mm[k]! - x_mm;
+      const y = series.values[k]!;
+      const u = series.u[k]!;
       if (!follows(sums, used, x, y, u)) return confirmed(kept);
       add(sums, x, y, u);
       used += 1;
