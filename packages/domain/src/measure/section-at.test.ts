@@ -71,6 +71,9 @@ describe("one section of a seam", () => {
     const found = whys((x, index) => [...clean(x, index), spike, near]);
     expect(found).toContainEqual({ point: spike, why: "spike" });
     expect(found).toContainEqual({ point: near, why: "edge" });
+    // Without metal over it a stray point by the root is a spike like any other.
+    const stray: SectionPoint = [-2, 2];
+    expect(whys((x, index) => [...clean(x, index), stray])).toContainEqual({ point: stray, why: "spike" });
     const tack = Array.from({ length: 40 }, (_, i): SectionPoint => [-3.2 + i / 10, i / 10]);
     const covered = whys((x, index) => [...clean(x, index).filter(([l, n]) => l < -4 || n > 4), ...tack]);
     expect(covered.filter(({ why }) => why === "tack").length).toBeGreaterThan(20);

@@ -1,5 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { parseSeamModel } from "../schemas/seam-model.ts";
+import { drawsFrom } from "./fit/consensus-line.ts";
 import { jointFaces } from "./joints/joint-faces.ts";
 import type { ScanCloud } from "./scan-cloud.ts";
 import { jointModel, type Moves, pointsOn, SECTIONS, scanOf } from "./testing/joints.ts";
@@ -70,6 +71,14 @@ describe("a mistaken unit", () => {
     ["all points in one place", cloudOf(Array.from({ length: 50 }, () => [3, 0, 0] as const))],
   ])("is not seen in %s", (_name, cloud) => {
     expect(mistake(cloud)).toBeNull();
+  });
+
+  it("is not seen in points that would lie about the seam in another unit, but not on its plates", () => {
+    const draw = drawsFrom(4);
+    const heap = scanOf(LENGTH_MM, () =>
+      Array.from({ length: 40 }, () => [80 * draw() - 40, 80 * draw() - 40] as const),
+    );
+    expect(mistake(scaled(heap, 1 / 25.4))).toBeNull();
   });
 
   it("is not guessed from a scan that would fit along too little of the seam in another unit", () => {

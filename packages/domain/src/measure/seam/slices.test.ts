@@ -75,6 +75,14 @@ describe("slices", () => {
     expect(slices.starts.at(-1)).toBe(slanting.length);
   });
 
+  it("cut the dense stretches of a torn cloud every millimetre: three stretches are no profiles", () => {
+    const stretch = (from: number) =>
+      Array.from({ length: 4000 }, (_, i): Vector => [from + i / 400, (i % 37) - 18, 0]);
+    const slices = cut([0, 15, 30, 45].flatMap(stretch));
+    expect(slices.pitch_mm).toBeCloseTo(1, 1);
+    expect(slices.starts.at(-1)).toBe(16_000);
+  });
+
   it("go round a closed seam: the profile over its end is one slice, not two", () => {
     const round = circleModel(100, 40);
     const length = round.seam.length_mm;

@@ -164,6 +164,30 @@ describe("a section under a tack", () => {
     expect(tack).toBe(false);
   });
 
+  it("is no tack of four stray points in a coarse scan, where they are a larger share", () => {
+    const joint = jointOf("fillet_t");
+    const stray: SectionPoint[] = [
+      [-1, 1],
+      [-1.5, 1.2],
+      [-2, 1],
+      [-1.2, 1.8],
+    ];
+    const coarse = pointsOn(joint, { spacing_mm: 0.5 });
+    expect(measured(joint, [...coarse, ...stray]).tack).toBe(false);
+    expect(measured(joint, [...coarse, ...stray, [-1.7, 1.6]]).tack).toBe(true);
+  });
+
+  it("shows no gap under metal, though the faces beneath be seen as well", () => {
+    const joint = jointOf("fillet_t");
+    const open = pointsOn(joint, { moves: { b: [0, 1, 0] }, spacing_mm: 0.1 });
+    const metal = drawn([
+      [-3, 0.5],
+      [-0.5, 3],
+    ]);
+    expect(measured(joint, open).seen_gap?.gap_mm).toBeCloseTo(1, 1);
+    expect(measured(joint, [...open, ...metal])).toMatchObject({ tack: true, seen_gap: null });
+  });
+
   it("is no tack where metal lies beyond the root's neighbourhood", () => {
     const joint = jointOf("fillet_t");
     const ball = drawn([
@@ -173,6 +197,31 @@ describe("a section under a tack", () => {
     ]);
     expect(measured(joint, [...pointsOn(joint, { spacing_mm: 0.1 }), ...ball]).tack).toBe(false);
   });
+});
+
+it("rounded corners, as wide as a laser line, move neither root nor angle", () => {
+  const joint = jointOf("fillet_t");
+  const radius = 0.7;
+  /** The root's corner filled with an arc, the upright's top edge worn off by one. */
+  const rounded = (seed: number) => {
+    const arc = (l: number, n: number, from: number) =>
+      Array.from({ length: 12 }, (_, i): SectionPoint => {
+        const angle = from + ((i + 0.5) / 12) * (Math.PI / 2);
+        return [l + radius * Math.cos(angle), n + radius * Math.sin(angle)];
+      });
+    const far = ([l, n]: SectionPoint) => !(n < radius && l > -radius) && !(n > 20 - radius && l < radius);
+    return [
+      ...pointsOn(joint, { seed, spacing_mm: 0.1, noise_mm: 0.01 }).filter(far),
+      ...arc(-radius, radius, -Math.PI / 2),
+      ...arc(radius, 20 - radius, Math.PI / 2),
+    ];
+  };
+  const found = Array.from({ length: 20 }, (_, i) => measured(joint, rounded(i + 1)).at);
+  const mean = (key: "lateral_mm" | "normal_mm" | "angle_rad") =>
+    found.reduce((sum, at) => sum + at[key] / found.length, 0);
+  expect(Math.abs(mean("lateral_mm"))).toBeLessThan(0.002);
+  expect(Math.abs(mean("normal_mm"))).toBeLessThan(0.002);
+  expect(Math.abs(mean("angle_rad"))).toBeLessThan(0.0005);
 });
 
 describe("where two faces meet", () => {

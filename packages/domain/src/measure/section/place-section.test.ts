@@ -30,6 +30,15 @@ describe.each(JOINT_TYPES)("a %s looked for in a section", (type) => {
     );
   });
 
+  it("is found where it stands when it is turned far off, not where it stood before the turn", () => {
+    for (const turn_deg of [6, -6]) {
+      const move = [8, 8, turn_deg] as const;
+      const points = sliceFrom(pointsOn(joint, { moves: { a: move, b: move }, reach_mm: 30 }));
+      const found = placeSection(points, fields, null);
+      expect(Math.hypot(found.l_mm - 8, found.n_mm - 8)).toBeLessThan(0.5);
+    }
+  });
+
   it("is believed beside where it was found before", () => {
     const move = [2.3, -1.2, 2] as const;
     const points = sliceFrom(pointsOn(joint, { moves: { a: move, b: move }, reach_mm: 30 }));
