@@ -20,6 +20,8 @@ export default defineConfig({
     outDir: "dist",
     // Nothing is written into the pages as data: URIs, so that the content policy can stay at 'self'.
     assetsInlineLimit: 0,
+    // The 3D library is large; only the viewer loads it, and only when asked for.
+    chunkSizeWarningLimit: 640,
     rolldownOptions: {
       output: {
         codeSplitting: {

@@ -32,6 +32,12 @@ export type MeasureTask =
       readonly station_mm: number;
     }
   | {
+      readonly kind: "cloud";
+      readonly files: ScanFiles;
+      /** Points kept at most. */
+      readonly most: number;
+    }
+  | {
       readonly kind: "pass";
       readonly log: { readonly name: string; readonly path: string };
       readonly process: string;
@@ -44,4 +50,6 @@ export type MeasureAnswer<T extends MeasureTask> = T["kind"] extends "evaluate"
   ? Outcome<ScanResult | BeadResult>
   : T["kind"] extends "section"
     ? Outcome<SectionView>
-    : Outcome<PassResult>;
+    : T["kind"] extends "cloud"
+      ? Outcome<Uint8Array>
+      : Outcome<PassResult>;

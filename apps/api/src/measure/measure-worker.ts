@@ -5,6 +5,7 @@ import { good, type Outcome } from "@beadroll/domain/faults/fault";
 import { beadSectionAt } from "@beadroll/domain/measure/bead/bead-section-at";
 import { evaluateBead } from "@beadroll/domain/measure/bead/evaluate-bead";
 import { measureBead } from "@beadroll/domain/measure/bead/measure-bead";
+import { encodeCloud } from "@beadroll/domain/measure/cloud/cloud-codec";
 import { evaluateScan } from "@beadroll/domain/measure/evaluate";
 import { readScan } from "@beadroll/domain/measure/read/read-scan";
 import type { ScanCloud } from "@beadroll/domain/measure/scan-cloud";
@@ -97,6 +98,7 @@ async function work(task: MeasureTask): Promise<Outcome<unknown>> {
   if (task.kind === "pass") return reduce(task);
   const cloud = await read(task.files);
   if (!cloud.ok) return cloud;
+  if (task.kind === "cloud") return good(encodeCloud(cloud.value, task.most));
   return task.kind === "section" ? good(sectionIn(cloud.value, task)) : evaluate(cloud.value, task);
 }
 

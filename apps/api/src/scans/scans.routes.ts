@@ -7,7 +7,7 @@ import { refusal } from "../http/refusal.ts";
 import { type Route, route } from "../http/route.ts";
 import { readCorrectedPath, readFillAdvice } from "./scan-advice.ts";
 import { readScanPage } from "./scans.read.ts";
-import { readSection, recordScan } from "./scans.service.ts";
+import { readScanCloud, readSection, recordScan } from "./scans.service.ts";
 
 const Remembered = z.object({ scan_id: z.string() });
 
@@ -26,6 +26,12 @@ export function scanRoutes(deps: Deps): Route[] {
       (remembered) => readScanPage(reader, Remembered.parse(remembered).scan_id),
     ),
     route(contracts.getScan, ({ params }) => readScanPage(reader, params.id)),
+    route(contracts.getScanCloud, async ({ params }) => ({
+      stream: Readable.from([Buffer.from(await readScanCloud(deps, params.id))]),
+      media_type: "application/octet-stream",
+      file_name: `cloud-${params.id}.bin`,
+      inline: false,
+    })),
     route(contracts.getCorrectedPath, ({ params }) => readCorrectedPath(reader, params.id)),
     route(contracts.getCorrectedPathCsv, async ({ params }) => {
       const path = await readCorrectedPath(reader, params.id);

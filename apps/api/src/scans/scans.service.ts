@@ -16,7 +16,7 @@ import { type ChangeContext, type ChangeTrx, change, type Row } from "../ledger/
 import type { MeasureTask, ScanFiles } from "../measure/measure-task.ts";
 import { attemptFor, readSeamHandle, refuseOtherPart, type SeamHandle } from "../seams/seam-lookup.ts";
 import { deriveSeam } from "../seams/seam-state.store.ts";
-import { readScanPage, readScanSource } from "./scans.read.ts";
+import { readScanPage, readScanSource, type ScanSource } from "./scans.read.ts";
 
 /** A scan that was pushed: what came with it and its files, already in the store. */
 export interface PushedScan {
@@ -167,6 +167,23 @@ export async function recordScan(deps: Deps, context: ChangeContext, pushed: Pus
   });
 }
 
+/** Where a stored scan's files lie. */
+const storedFiles = (deps: Deps, source: ScanSource): ScanFiles => ({
+  scan: { name: source.file_name, path: deps.store.pathOf(source.file_digest) },
+  poses:
+    source.poses_digest === null ? null : { name: "poses.csv", path: deps.store.pathOf(source.poses_digest) },
+  units: source.units,
+});
+
+/** Points drawn at most: more cannot be told apart on a screen. */
+const DRAWN_MAX = 200_000;
+
+/** The points of a stored scan, thinned, as `encodeCloud` writes them. @throws Refusal not-found */
+export async function readScanCloud(deps: Deps, scanId: string): Promise<Uint8Array> {
+  const files = storedFiles(deps, await readScanSource(deps.db.reader, scanId));
+  return accepted(await deps.measure.run({ kind: "cloud", files, most: DRAWN_MAX }));
+}
+
 /** The cross-section of a stored scan at a station. @throws Refusal not-found */
 export async function readSection(deps: Deps, scanId: string, station_mm: number): Promise<SectionView> {
   const { reader } = deps.db;
@@ -177,14 +194,7 @@ export async function readSection(deps: Deps, scanId: string, station_mm: number
     stage: source.stage,
     model: { ...model, limits: JSON.parse(source.limits) },
     station_mm,
-    files: {
-      scan: { name: source.file_name, path: deps.store.pathOf(source.file_digest) },
-      poses:
-        source.poses_digest === null
-          ? null
-          : { name: "poses.csv", path: deps.store.pathOf(source.poses_digest) },
-      units: source.units,
-    },
+    files: storedFiles(deps, source),
   });
   return accepted(outcome);
 }

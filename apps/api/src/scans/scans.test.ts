@@ -1,3 +1,4 @@
+import { decodeCloud } from "@beadroll/domain/measure/cloud/cloud-codec";
 import type { PartPage } from "@beadroll/domain/schemas/part";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import { aBeadScan, aCell, aPart, aScan } from "../testing/builders.ts";
@@ -78,6 +79,25 @@ describe("a scan of the finished bead", () => {
       const refused = await get(what);
       expect([refused.status, refused.body.type]).toEqual([409, expect.stringMatching(/scan-not-fitup$/)]);
     }
+  });
+});
+
+describe("the points of a scan", () => {
+  it("are given thinned, in the part frame, to whoever may read records", async () => {
+    const pushed = await push(seamTag(6));
+    const got = await server.http
+      .get(`/api/v1/scans/${pushed.body.id}/cloud`)
+      .set("Authorization", reader)
+      .buffer(true)
+      .parse((response, done) => {
+        const chunks: Buffer[] = [];
+        response.on("data", (chunk: Buffer) => chunks.push(chunk));
+        response.on("end", () => done(null, Buffer.concat(chunks)));
+      });
+    expect([got.status, got.headers["content-type"]]).toEqual([200, "application/octet-stream"]);
+    const { count, xyz_mm } = decodeCloud(new Uint8Array(got.body));
+    expect([count, xyz_mm.length / 3]).toEqual([pushed.body.points, pushed.body.points]);
+    expect(xyz_mm[1]).toBeCloseTo(99.6, 3);
   });
 });
 

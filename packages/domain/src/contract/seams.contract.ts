@@ -114,6 +114,20 @@ export const getSection = contract({
   problems: ["not-found", "parameter-unknown"],
 });
 
+export const getScanCloud = contract({
+  method: "get",
+  path: "/scans/{id}/cloud",
+  operationId: "getScanCloud",
+  summary: "The points of a scan, thinned, to be drawn",
+  description:
+    "Little-endian: uint32 points of the scan, uint32 points that follow, then x, y, z of each as float32, mm, part frame. At most 200,000 points, evenly thinned; the whole scan is its file.",
+  group: "Scans",
+  access: "records:read",
+  params: IdParams,
+  answer: { status: 200, description: "The points", media_type: "application/octet-stream" },
+  problems: ["not-found"],
+});
+
 export const getCorrectedPath = contract({
   method: "get",
   path: "/scans/{id}/path",

@@ -1,6 +1,6 @@
 import type { BeadResult } from "@beadroll/domain/schemas/bead-result";
 import type { SeamModel } from "@beadroll/domain/schemas/seam-model";
-import { type ReactElement, useMemo } from "react";
+import { type ReactElement, type ReactNode, useMemo } from "react";
 import { Sheet } from "../../kit/page/sheet.tsx";
 import { PlotStack } from "../../kit/plots/plot-stack.tsx";
 import { StateMark } from "../../kit/states/state-mark.tsx";
@@ -20,6 +20,8 @@ export function FinishedBead(props: {
   result: BeadResult;
   model: SeamModel;
   aside?: string;
+  /** Stands under the drawings. */
+  children?: ReactNode;
 }): ReactElement {
   const { result, model } = props;
   const plots = useMemo(() => beadPlots(result), [result]);
@@ -43,6 +45,7 @@ export function FinishedBead(props: {
         length_mm={model.seam.length_mm}
         height={84}
       />
+      {props.children}
     </Sheet>
   );
 }

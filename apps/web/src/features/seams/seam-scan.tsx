@@ -7,6 +7,7 @@ import { Sheet } from "../../kit/page/sheet.tsx";
 import { EmptyState } from "../../kit/states/empty-state.tsx";
 import { StateMark } from "../../kit/states/state-mark.tsx";
 import { FinishedBead } from "../beads/finished-bead.tsx";
+import { CloudView } from "../cloud-view/cloud-view.tsx";
 import { ScanAdvice } from "./scan-advice.tsx";
 import { Reasons } from "./scan-reasons.tsx";
 import { SeamDrawings } from "./seam-drawings.tsx";
@@ -46,7 +47,9 @@ function ShownScan(props: { seam: SeamPage; scanId: string }): ReactElement {
   return (
     <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-6 xl:grid-cols-[minmax(0,1fr)_26rem]">
       {scan.stage === "bead" ? (
-        <FinishedBead label={label} result={scan.result} model={model} />
+        <FinishedBead label={label} result={scan.result} model={model}>
+          <CloudView key={scan.id} scanId={scan.id} model={model} />
+        </FinishedBead>
       ) : (
         <FitUp label={label} scan={scan} seam={seam} model={model} />
       )}
@@ -76,6 +79,7 @@ function FitUp(props: {
       <Reasons result={scan.result} />
       <SeamDrawings label={props.label} result={scan.result} model={model} pass={pass} />
       <ScanAdvice scanId={scan.id} />
+      <CloudView key={scan.id} scanId={scan.id} model={model} />
     </Sheet>
   );
 }
