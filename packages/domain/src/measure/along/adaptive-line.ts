@@ -1,3 +1,4 @@
+import { add, type Estimate, lineAtZero, noSums, parabolaAtZero, type Sums } from "./local-fit.ts";
 import type { Series } from "./scatter.ts";
 
 /** The longest stretch to either side that a value may lean on, mm. */
@@ -21,53 +22,8 @@ const CHOSEN = 1.1;
 /** Empty stretches this many times the usual pitch are not bridged. */
 const BRIDGE = 2.6;
 
-/** A value along the seam with its standard uncertainty. */
-export interface Estimate {
-  readonly value: number;
-  readonly u: number;
-}
-
-/** Weighted sums of powers of x, and of y times powers of x. */
-type Sums = Float64Array;
-const noSums = (): Sums => new Float64Array(8);
-
 /** Sums that serve again at every place: they are asked for some hundred times at each. */
 const room = { side: noSums(), moved: noSums(), both: noSums() };
-
-function add(sums: Sums, x: number, y: number, u: number): void {
-  const w = 1 / (u * u);
-  sums[0]! += w;
-  sums[1]! += w * x;
-  sums[2]! += w * x * x;
-  sums[3]! += w * x * x * x;
-  sums[4]! += w * x * x * x * x;
-  sums[5]! += w * y;
-  sums[6]! += w * x * y;
-  sums[7]! += w * x * x * y;
-}
-
-/** The weighted straight line's value at x = 0; a mean where all points lie at one place. */
-function lineAtZero(sums: Sums): Estimate {
-  const w = sums[0]!;
-  const x = sums[1]!;
-  const xx = sums[2]!;
-  const y = sums[5]!;
-  const xy = sums[6]!;
-  const det = w * xx - x * x;
-  if (det <= 1e-9 * w * xx) return { value: y / w, u: 1 / Math.sqrt(w) };
-  return { value: (xx * y - x * xy) / det, u: Math.sqrt(xx / det) };
-}
-
-/** The weighted parabola's value at x = 0; null where the places do not carry one. Cramer's rule. */
-function parabolaAtZero(sums: Sums): Estimate | null {
-  const [s0 = 0, s1 = 0, s2 = 0, s3 = 0, s4 = 0, y0 = 0, y1 = 0, y2 = 0] = sums;
-  const c0 = s2 * s4 - s3 * s3;
-  const c1 = s2 * s3 - s1 * s4;
-  const c2 = s1 * s3 - s2 * s2;
-  const det = s0 * c0 + s1 * c1 + s2 * c2;
-  if (!(det > 1e-9 * s0 * s2 * s4)) return null;
-  return { value: (c0 * y0 + c1 * y1 + c2 * y2) / det, u: Math.sqrt(c0 / det) };
-}
 
 const measured = ({ values, u }: Series, k: number) => Number.isFinite(values[k]) && u[k]! > 0;
 

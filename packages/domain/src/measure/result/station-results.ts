@@ -1,6 +1,7 @@
 import type { StationResult } from "../../schemas/scan-result.ts";
-import { adaptiveLine, type Estimate } from "../along/adaptive-line.ts";
+import { adaptiveLine } from "../along/adaptive-line.ts";
 import type { JointSeries, Quantity } from "../along/joint-series.ts";
+import type { Estimate } from "../along/local-fit.ts";
 import type { MeasuredSeam } from "../seam/measure-seam.ts";
 import { nearestSlice, nearMm } from "../seam/nearest-slice.ts";
 import { type SeamFrames, toPart } from "../seam/seam-frames.ts";
