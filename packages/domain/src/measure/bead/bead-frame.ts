@@ -2,6 +2,7 @@ import { distanceFrom } from "../fit/line-fit.ts";
 import { medianOf } from "../fit/median.ts";
 import type { SectionSlice } from "../section/face-fit.ts";
 import { meetingAlong } from "../section/fit-section.ts";
+import { putInOrder } from "./in-order.ts";
 import type { ParentFace } from "./parent-faces.ts";
 import { followers } from "./spikes.ts";
 
@@ -91,25 +92,32 @@ export function beadProfile(
   reach_mm: number,
   noise_mm: number,
 ): BeadProfile {
-  const found: [u: number, v: number, l: number, n: number][] = [];
+  const size = slice.to - slice.from;
+  const columns = [0, 1, 2, 3].map(() => new Float64Array(size));
+  const [us, vs, ls, ns] = columns as [Float64Array, Float64Array, Float64Array, Float64Array];
+  let count = 0;
   for (let i = slice.from; i < slice.to; i++) {
     const [l, n] = [slice.l_mm[i]!, slice.n_mm[i]!];
     const [dl, dn] = [l - origin[0], n - origin[1]];
     const at_u = dl * u[0] + dn * u[1];
     const at_v = dl * v[0] + dn * v[1];
-    if (Math.abs(at_u) <= reach_mm && Math.abs(at_v) <= reach_mm) found.push([at_u, at_v, l, n]);
+    if (Math.abs(at_u) > reach_mm || Math.abs(at_v) > reach_mm) continue;
+    us[count] = at_u;
+    vs[count] = at_v;
+    ls[count] = l;
+    ns[count] = n;
+    count += 1;
   }
-  found.sort((p, q) => p[0] - q[0]);
-  const column = (k: 0 | 1 | 2 | 3) => Float64Array.from(found, (point) => point[k]);
-  const [u_mm, v_mm] = [column(0), column(1)];
+  putInOrder(us, [vs, ls, ns], count);
+  const [u_mm, v_mm] = [us.subarray(0, count), vs.subarray(0, count)];
   const steps = u_mm.subarray(1).map((at, i) => at - u_mm[i]!);
   return {
     u_mm,
     v_mm,
-    l_mm: column(2),
-    n_mm: column(3),
-    count: found.length,
-    follows: followers(u_mm, v_mm, found.length, noise_mm),
+    l_mm: ls.subarray(0, count),
+    n_mm: ns.subarray(0, count),
+    count,
+    follows: followers(u_mm, v_mm, count, noise_mm),
     spacing_mm: steps.length > 0 ? Math.max(1e-3, medianOf(steps)) : 1e-3,
   };
 }

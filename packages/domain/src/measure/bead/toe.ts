@@ -1,7 +1,8 @@
-import type { FittedLine } from "../fit/line-fit.ts";
+import { distanceFrom, type FittedLine } from "../fit/line-fit.ts";
 import { medianOf } from "../fit/median.ts";
-import { type BeadProfile, onParent, overParent } from "./bead-frame.ts";
+import { type BeadProfile, onParent } from "./bead-frame.ts";
 import { faceCurve, meetParent, SHARED_ERROR } from "./face-curve.ts";
+import { putInOrder } from "./in-order.ts";
 import type { ParentFace } from "./parent-faces.ts";
 import { followers } from "./spikes.ts";
 
@@ -75,18 +76,30 @@ interface Across {
  * axes the weld's face, an undercut and the parent face lie one after the other.
  */
 export function across(profile: BeadProfile, parent: ParentFace, which: 0 | 1): Across {
-  const points: { t_mm: number; h_mm: number; i: number }[] = [];
+  const { near, direction_rad } = parent.side.face;
+  const [c, s] = [Math.cos(direction_rad), Math.sin(direction_rad)];
+  const [ts, hs] = [new Float64Array(profile.count), new Float64Array(profile.count)];
+  const places = new Int32Array(profile.count);
+  let all = 0;
   for (let i = 0; i < profile.count; i++) {
     if (which === 0 ? profile.u_mm[i]! > 0 : profile.u_mm[i]! < 0) continue;
-    points.push({ ...overParent(parent, profile.l_mm[i]!, profile.n_mm[i]!), i });
+    const [l, n] = [profile.l_mm[i]! - near[0], profile.n_mm[i]! - near[1]];
+    ts[all] = l * c + n * s;
+    hs[all] = parent.side.open * distanceFrom(parent.fit, ts[all]!, n * c - l * s);
+    places[all] = i;
+    all += 1;
   }
-  points.sort((p, q) => p.t_mm - q.t_mm);
-  const t = Float64Array.from(points, ({ t_mm }) => t_mm);
-  const h = Float64Array.from(points, ({ h_mm }) => h_mm);
-  const follows = followers(t, h, points.length, parent.fit.scale_mm);
-  const kept = (_: number, i: number) => follows[i] === 1;
-  const index = Int32Array.from(points, ({ i }) => i).filter(kept);
-  return { t: t.filter(kept), h: h.filter(kept), count: index.length, index };
+  putInOrder(ts, [hs, places], all);
+  const follows = followers(ts, hs, all, parent.fit.scale_mm);
+  let count = 0;
+  for (let i = 0; i < all; i++) {
+    if (follows[i] === 0) continue;
+    ts[count] = ts[i]!;
+    hs[count] = hs[i]!;
+    places[count] = places[i]!;
+    count += 1;
+  }
+  return { t: ts.subarray(0, count), h: hs.subarray(0, count), index: places.subarray(0, count), count };
 }
 
 /** The first point from the middle outward from which on the points lie on the parent face; -1 where they never do. */
